@@ -1,0 +1,1 @@
+export type { Frame, FrameKind, FrameOutcome, Mark, Px, Scale, Scales } from './types';

@@ -1,0 +1,13 @@
+export { readingDocument } from './document';
+export type {
+  ReadingAxis,
+  ReadingChart,
+  ReadingCurve,
+  ReadingDocument,
+  ReadingFamily,
+  ReadingMark,
+  ReadingModule,
+  ReadingPrediction,
+  ReadingRating,
+} from './document';
+export { QUANTITIES, RATING_KEYS, UNITS, type RatingKey } from './quantities';
