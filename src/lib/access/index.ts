@@ -1,0 +1,1 @@
+export { can, type Access, type Action, type Actor, type Role, ROLES, isRole } from './access';

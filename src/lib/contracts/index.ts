@@ -1,0 +1,3 @@
+export * from './common';
+export * from './parts';
+export * from './people';
