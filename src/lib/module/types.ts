@@ -1,0 +1,43 @@
+import type { Kelvin, Volt, Watt } from '@/lib/units';
+
+/** The three constants of a module: Seebeck coefficient in V/K, resistance in ohm, thermal conductance in W/K. */
+export interface ModuleConstants {
+  readonly alpha: number;
+  readonly R: number;
+  readonly K: number;
+}
+
+/**
+ * A thermoelectric module as every other room sees it, whatever stands behind it. Current in A, positive when it cools the cold
+ * face; absolute face temperatures in K; any sign of the current and of Th − Tc.
+ */
+export interface ThermoelectricModule {
+  /** Heat absorbed at the cold face, W. */
+  heat(I: number, Tc: Kelvin, Th: Kelvin): Watt;
+  /** Voltage over the module, V. */
+  voltage(I: number, Tc: Kelvin, Th: Kelvin): Volt;
+  /** Electrical power taken up, W; negative while the module generates. */
+  power(I: number, Tc: Kelvin, Th: Kelvin): Watt;
+  /** Heat given off at the hot face, W: heat absorbed plus power. */
+  heatRejected(I: number, Tc: Kelvin, Th: Kelvin): Watt;
+  /** Heat absorbed over power; null where no power is taken up or the module generates. */
+  cop(I: number, Tc: Kelvin, Th: Kelvin): number | null;
+}
+
+/** What a constant module reaches with its hot face held at one temperature. */
+export interface ModuleMaxima {
+  /** Current of the largest temperature difference, A: the usual meaning of a printed Imax. */
+  readonly imaxLargestDeltaT: number;
+  /** Current of most heat with both faces alike, A. */
+  readonly imaxMostHeat: number;
+  /** Heat with both faces alike at the current of the largest temperature difference, W. */
+  readonly qmaxW: number;
+  /** Most heat with both faces alike, W, at `imaxMostHeat`. */
+  readonly qMostHeatW: number;
+  /** Largest temperature difference, K, without heat load. */
+  readonly dTmaxK: number;
+  /** Voltage at the largest temperature difference, V. */
+  readonly vmaxV: number;
+  /** Figure of merit α²/(RK), 1/K. */
+  readonly Z: number;
+}
