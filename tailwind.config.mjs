@@ -14,6 +14,9 @@ export default {
       muted: token('muted'),
       line: token('line'),
       faint: token('faint'),
+      control: token('control'),
+      middle: token('middle'),
+      shade: token('shade'),
       cold: token('cold'),
       hot: token('hot'),
       attention: token('attention'),
@@ -27,7 +30,7 @@ export default {
       'approved-wash': token('approved-wash'),
     },
     extend: {
-      fontFamily: { sans: ['"Roboto Flex Variable"', '"Roboto Flex"', 'system-ui', 'sans-serif'] },
+      fontFamily: { sans: ['"Roboto Flex Variable"', '"Roboto Flex"', '"Couplet stand-in"', 'system-ui', 'sans-serif'] },
       borderRadius: { DEFAULT: '4px' },
     },
   },
