@@ -1,4 +1,3 @@
-import { existsSync } from 'node:fs';
 import { QueryTypes } from 'sequelize';
 import { openConnection, type SerialSequelize } from './connection';
 import { migrator } from './migrations';
@@ -97,5 +96,5 @@ export async function selfCheck(): Promise<SelfCheck> {
 
 /** Puts a file back to the rollback journal, which the file itself remembers. */
 export async function useRollbackJournal(): Promise<void> {
-  if (existsSync(String(connection().options.storage))) await connection().query('PRAGMA journal_mode = DELETE');
+  await connection().query('PRAGMA journal_mode = DELETE');
 }

@@ -1,3 +1,6 @@
 export * from './common';
 export * from './parts';
 export * from './people';
+export * from './readings';
+export { type Operation } from './operation';
+export { operations, type OperationName } from './operations';

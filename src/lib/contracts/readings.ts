@@ -1,0 +1,149 @@
+import { z } from 'zod';
+import type { BenchDocument } from '@/lib/editor';
+import type { ReadingResult } from '@/lib/reading';
+import { RATING_KEYS } from '@/lib/reading';
+import { idParams, instant, paragraph, rowId, sha256 } from './common';
+import { moduleView, pageView, rating } from './parts';
+
+const finite = z.number();
+const px = z.tuple([finite, finite]);
+const ratingKey = z.enum(RATING_KEYS);
+const quantity = z.enum(['I', 'V', 'deltaT', 'Tc', 'Th', 'Qc', 'Qh', 'P', 'COP']);
+const unit = z.enum(['K', 'C', 'F', 'W', 'mW', 'V', 'mV', 'A', 'mA', '1', '%']);
+const key = z.string().min(1).max(20);
+
+const shown = { quantity: quantity.nullable(), unit: unit.nullable(), of: ratingKey.optional() };
+const axis = z.strictObject({ ...shown, scale: z.enum(['linear', 'log']) });
+
+const mark = z.strictObject({ id: key, px, x: finite.nullable(), y: finite.nullable() });
+const curve = z.strictObject({
+  id: key,
+  value: finite.nullable(),
+  by: z.enum(['hand', 'followed', 'path']),
+  points: z.array(px).max(20_000, 'A curve holds at most 20 000 points.'),
+  omitted: z.array(z.int().min(0)),
+  start: px.optional(),
+  through: z.array(px).max(200).optional(),
+});
+const chart = z.strictObject({
+  id: key,
+  pictureId: z.int().positive(),
+  pixelsSha256: sha256,
+  width: z.int().positive(),
+  height: z.int().positive(),
+  title: z.string().max(160),
+  x: axis,
+  y: axis,
+  family: z.strictObject(shown),
+  side: z.strictObject({ kind: z.enum(['hot', 'cold']), celsius: finite.nullable() }),
+  frame: z.enum(['upright', 'turned', 'perspective']).nullable(),
+  marks: z.array(mark).max(500, 'A chart holds at most 500 marks.'),
+  curves: z.array(curve).max(200, 'A chart holds at most 200 curves.'),
+});
+
+/** The draft as the bench edits it. */
+export const benchDocument: z.ZodType<BenchDocument> = z.strictObject({
+  format: z.literal('couplet.bench'),
+  version: z.literal(1),
+  charts: z.array(chart).max(60, 'A reading holds at most 60 charts.'),
+  model: z.strictObject({ form: z.enum(['auto', 'constant']), use: z.tuple([z.literal('curves')]) }),
+  note: z.string().max(4000).optional(),
+});
+
+export const READING_STATES = ['draft', 'handed-in', 'returned', 'approved', 'superseded', 'withdrawn'] as const;
+export const readingState = z.enum(READING_STATES);
+
+const who = z.strictObject({ id: z.string(), name: z.string() });
+
+export const decisionView = z.strictObject({
+  what: z.enum(['handed-in', 'taken-back', 'returned', 'approved', 'superseded', 'withdrawn', 'restored']),
+  reason: z.string(),
+  by: who,
+  at: instant,
+  readingId: rowId,
+});
+export type DecisionView = z.infer<typeof decisionView>;
+
+export const readingView = z.strictObject({
+  id: rowId,
+  version: z.int(),
+  state: readingState,
+  owner: who,
+  module: moduleView,
+  sheets: z.array(
+    z.strictObject({ id: rowId, title: z.string(), number: z.string(), revision: z.string(), pages: z.array(pageView) }),
+  ),
+  document: benchDocument,
+  savedAt: instant,
+  savedBy: who,
+  reason: z.string().nullable().describe('why it was returned, while it is'),
+  decisions: z.array(decisionView),
+  may: z.strictObject({ edit: z.boolean(), handIn: z.boolean(), takeBack: z.boolean(), decide: z.boolean() }),
+});
+export type ReadingView = z.infer<typeof readingView>;
+
+export const readingRow = z.strictObject({
+  id: rowId,
+  module: z.string(),
+  vendor: z.string(),
+  moduleId: rowId,
+  state: readingState,
+  owner: who,
+  savedAt: instant,
+  charts: z.int(),
+  curves: z.int(),
+});
+export type ReadingRow = z.infer<typeof readingRow>;
+
+export const saveBody = z.strictObject({ document: benchDocument });
+export const saveAnswer = z.strictObject({ version: z.int(), savedAt: instant });
+export type SaveAnswer = z.infer<typeof saveAnswer>;
+
+/** What a lost race answers beside its problem: the version that won. */
+export const currentVersion = z.strictObject({ version: z.int(), document: benchDocument, savedAt: instant, savedBy: who });
+export type CurrentVersion = z.infer<typeof currentVersion>;
+
+export const residual = z.strictObject({
+  chart: z.int(),
+  curve: z.int(),
+  point: z.int(),
+  px,
+  residual: finite,
+  percentOfRange: finite,
+  standardized: finite,
+  omitted: z.boolean(),
+});
+export type Residual = z.infer<typeof residual>;
+
+export const fittedCurve = z.strictObject({ chart: z.int(), value: finite, points: z.array(px).describe('pixels of the picture') });
+export type FittedCurve = z.infer<typeof fittedCurve>;
+
+export const ratingBeside = z.strictObject({
+  hotSideC: finite,
+  key: ratingKey,
+  printed: finite.nullable(),
+  implied: finite.nullable(),
+  u: finite.nullable(),
+  unit: z.string(),
+});
+export type RatingBeside = z.infer<typeof ratingBeside>;
+
+export const modelBody = z.strictObject({ document: benchDocument });
+export const modelAnswer = z.strictObject({
+  result: z.custom<ReadingResult>((value) => typeof value === 'object' && value !== null).nullable().describe('a couplet.result, version 1'),
+  residuals: z.array(residual),
+  curves: z.array(fittedCurve),
+  ratings: z.array(ratingBeside),
+  problems: z.array(z.strictObject({ chart: z.int().nullable(), text: z.string() })).describe('what is still missing, in sentences'),
+});
+export type ModelAnswer = z.infer<typeof modelAnswer>;
+
+export const handInBody = z.strictObject({ note: paragraph(2000).default('') });
+export const emptyBody = z.strictObject({});
+export const reason = paragraph(2000).min(10, 'Say in a sentence what has to be mended, so that the engineer can.');
+export const returnBody = z.strictObject({ reason });
+export const stateAnswer = z.strictObject({ state: readingState, version: z.int() });
+export type StateAnswer = z.infer<typeof stateAnswer>;
+
+export const readingParams = idParams;
+export { rating };

@@ -1,0 +1,5 @@
+export { signIn, signOut, type SignedInPerson } from './sign-in';
+export { lucia, sessionOf, listSessions, endSession, type LiveSession } from './sessions';
+export { hashPassword, verifyPassword } from './passwords';
+export { changePassword } from './account';
+export { requireCan } from './require';
