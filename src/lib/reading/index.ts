@@ -11,3 +11,17 @@ export type {
   ReadingRating,
 } from './document';
 export { QUANTITIES, RATING_KEYS, UNITS, type RatingKey } from './quantities';
+export { ENGINE } from './result';
+export type {
+  DerivedRatings,
+  ReadChart,
+  ReadCheck,
+  ReadCurve,
+  ReadDoubt,
+  ReadGap,
+  ReadingModel,
+  ReadingResult,
+  ReadPoint,
+  ReadPrediction,
+  Validity,
+} from './result';
