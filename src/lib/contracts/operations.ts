@@ -36,7 +36,6 @@ export const operations = {
   signIn: operation({ method: 'POST', path: '/api/session', tag: 'account', summary: 'Sign in', may: 'open', body: signInBody, status: 200, answer: person, problems: [401, 429] }),
   signOut: operation({ method: 'DELETE', path: '/api/session', tag: 'account', summary: 'Sign out', may: 'account.use', status: 204 }),
   me: operation({ method: 'GET', path: '/api/me', tag: 'account', summary: 'Who is signed in', may: 'account.use', status: 200, answer: person }),
-  theme: operation({ method: 'PUT', path: '/api/account/theme', tag: 'account', summary: 'Choose light, dark or what the device says', may: 'open', body: z.strictObject({ theme: z.enum(['light', 'dark', 'device']) }), status: 204 }),
   sessions: operation({ method: 'GET', path: '/api/account/sessions', tag: 'account', summary: 'One’s own sessions', may: 'account.use', status: 200, answer: z.array(sessionInfo) }),
   endSession: operation({ method: 'DELETE', path: '/api/account/sessions/{id}', tag: 'account', summary: 'End one of one’s own sessions', may: 'account.use', params: z.strictObject({ id: z.string().min(1).max(64) }), status: 204 }),
   changePassword: operation({ method: 'POST', path: '/api/account/password', tag: 'account', summary: 'Change one’s password; other sessions end', may: 'account.use', body: changePasswordBody, status: 204 }),

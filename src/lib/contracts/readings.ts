@@ -1,54 +1,13 @@
 import { z } from 'zod';
-import type { BenchDocument } from '@/lib/editor';
+import { benchDocument } from '@/lib/editor';
 import type { ReadingResult } from '@/lib/reading';
 import { RATING_KEYS } from '@/lib/reading';
-import { idParams, instant, paragraph, rowId, sha256 } from './common';
-import { moduleView, pageView, rating } from './parts';
+import { instant, paragraph, rowId } from './common';
+import { moduleView, pageView } from './parts';
 
 const finite = z.number();
 const px = z.tuple([finite, finite]);
 const ratingKey = z.enum(RATING_KEYS);
-const quantity = z.enum(['I', 'V', 'deltaT', 'Tc', 'Th', 'Qc', 'Qh', 'P', 'COP']);
-const unit = z.enum(['K', 'C', 'F', 'W', 'mW', 'V', 'mV', 'A', 'mA', '1', '%']);
-const key = z.string().min(1).max(20);
-
-const shown = { quantity: quantity.nullable(), unit: unit.nullable(), of: ratingKey.optional() };
-const axis = z.strictObject({ ...shown, scale: z.enum(['linear', 'log']) });
-
-const mark = z.strictObject({ id: key, px, x: finite.nullable(), y: finite.nullable() });
-const curve = z.strictObject({
-  id: key,
-  value: finite.nullable(),
-  by: z.enum(['hand', 'followed', 'path']),
-  points: z.array(px).max(20_000, 'A curve holds at most 20 000 points.'),
-  omitted: z.array(z.int().min(0)),
-  start: px.optional(),
-  through: z.array(px).max(200).optional(),
-});
-const chart = z.strictObject({
-  id: key,
-  pictureId: z.int().positive(),
-  pixelsSha256: sha256,
-  width: z.int().positive(),
-  height: z.int().positive(),
-  title: z.string().max(160),
-  x: axis,
-  y: axis,
-  family: z.strictObject(shown),
-  side: z.strictObject({ kind: z.enum(['hot', 'cold']), celsius: finite.nullable() }),
-  frame: z.enum(['upright', 'turned', 'perspective']).nullable(),
-  marks: z.array(mark).max(500, 'A chart holds at most 500 marks.'),
-  curves: z.array(curve).max(200, 'A chart holds at most 200 curves.'),
-});
-
-/** The draft as the bench edits it. */
-export const benchDocument: z.ZodType<BenchDocument> = z.strictObject({
-  format: z.literal('couplet.bench'),
-  version: z.literal(1),
-  charts: z.array(chart).max(60, 'A reading holds at most 60 charts.'),
-  model: z.strictObject({ form: z.enum(['auto', 'constant']), use: z.tuple([z.literal('curves')]) }),
-  note: z.string().max(4000).optional(),
-});
 
 export const READING_STATES = ['draft', 'handed-in', 'returned', 'approved', 'superseded', 'withdrawn'] as const;
 export const readingState = z.enum(READING_STATES);
@@ -145,5 +104,3 @@ export const returnBody = z.strictObject({ reason });
 export const stateAnswer = z.strictObject({ state: readingState, version: z.int() });
 export type StateAnswer = z.infer<typeof stateAnswer>;
 
-export const readingParams = idParams;
-export { rating };

@@ -3,7 +3,8 @@ import { ensureDatabase } from '@db';
 import { config } from '../config';
 import { lucia, sessionOf } from '../people';
 
-export const THEME_COOKIE = 'couplet-theme';
+/** Set by the page itself when somebody chooses; absent means what the device says. */
+const THEME_COOKIE = 'theme';
 
 /** Fills in who asks: the person and session behind the cookie, or nobody. */
 export const identify: MiddlewareHandler = async (context, next) => {

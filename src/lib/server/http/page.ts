@@ -7,7 +7,7 @@ import { Refusal } from '../refusal';
  * Who looks at a page, or the answer to give instead: the sign-in page (which comes back here), or the
  * "not allowed" page. Every page but the open ones begins with it.
  */
-export function requirePage(astro: AstroGlobal, may: Action): SignedInPerson | Response {
+export async function requirePage(astro: AstroGlobal, may: Action): Promise<SignedInPerson | Response> {
   const { actor } = astro.locals;
   if (!actor) {
     const back = `${astro.url.pathname}${astro.url.search}`;

@@ -1,0 +1,1 @@
+export { addModule, changeModule, moduleById, moduleName, toModuleView, vendorList } from './modules';
