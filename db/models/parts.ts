@@ -95,90 +95,91 @@ export class Page extends Model<InferAttributes<Page>, InferCreationAttributes<P
   declare picture?: NonAttribute<Picture>;
 }
 
-const id = { type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true };
-const text = { type: DataTypes.TEXT };
-const required = { type: DataTypes.TEXT, allowNull: false };
-const real = { type: DataTypes.REAL };
-const whole = { type: DataTypes.INTEGER };
-const date = { type: DataTypes.DATE };
-const stamps = { createdAt: date, updatedAt: date };
+// Functions: Sequelize writes into the objects it is given, so none may be shared.
+const id = () => ({ type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true });
+const text = () => ({ type: DataTypes.TEXT });
+const required = () => ({ type: DataTypes.TEXT, allowNull: false });
+const real = () => ({ type: DataTypes.REAL });
+const whole = () => ({ type: DataTypes.INTEGER });
+const date = () => ({ type: DataTypes.DATE });
+const stamps = () => ({ createdAt: date(), updatedAt: date() });
 
 export function initParts(sequelize: Sequelize) {
-  Vendor.init({ id, name: required, ...stamps }, { sequelize, modelName: 'Vendor', tableName: 'vendors' });
+  Vendor.init({ id: id(), name: required(), ...stamps() }, { sequelize, modelName: 'Vendor', tableName: 'vendors' });
   Module.init(
     {
-      id,
-      vendorId: whole,
-      partNumber: required,
-      variant: text,
-      stages: whole,
-      couples: whole,
-      coldPlateWidthMm: real,
-      coldPlateDepthMm: real,
-      hotPlateWidthMm: real,
-      hotPlateDepthMm: real,
-      heightMm: real,
-      maxTemperatureC: real,
-      leadsOhm: real,
-      sealing: text,
-      acResistanceOhm: real,
-      acResistanceAtC: real,
-      version: { ...whole, defaultValue: 1 },
-      ...stamps,
+      id: id(),
+      vendorId: whole(),
+      partNumber: required(),
+      variant: text(),
+      stages: whole(),
+      couples: whole(),
+      coldPlateWidthMm: real(),
+      coldPlateDepthMm: real(),
+      hotPlateWidthMm: real(),
+      hotPlateDepthMm: real(),
+      heightMm: real(),
+      maxTemperatureC: real(),
+      leadsOhm: real(),
+      sealing: text(),
+      acResistanceOhm: real(),
+      acResistanceAtC: real(),
+      version: { ...whole(), defaultValue: 1 },
+      ...stamps(),
     },
     { sequelize, modelName: 'Module', tableName: 'modules' },
   );
   Rating.init(
     {
-      id,
-      moduleId: whole,
-      hotSideC: real,
-      imaxA: real,
-      vmaxV: real,
-      qmaxW: real,
-      dTmaxK: { ...real, field: 'dtmax_k' },
-      imaxMeans: text,
-      basis: text,
-      atmosphere: text,
-      tolerancePercent: real,
+      id: id(),
+      moduleId: whole(),
+      hotSideC: real(),
+      imaxA: real(),
+      vmaxV: real(),
+      qmaxW: real(),
+      dTmaxK: { ...real(), field: 'dtmax_k' },
+      imaxMeans: text(),
+      basis: text(),
+      atmosphere: text(),
+      tolerancePercent: real(),
     },
     { sequelize, modelName: 'Rating', tableName: 'ratings', timestamps: false },
   );
   Sheet.init(
     {
-      id,
-      vendorId: whole,
-      title: text,
-      number: text,
-      revision: text,
-      dated: text,
-      obtainedFrom: text,
-      obtainedOn: text,
-      createdBy: required,
-      version: { ...whole, defaultValue: 1 },
-      ...stamps,
+      id: id(),
+      vendorId: whole(),
+      title: text(),
+      number: text(),
+      revision: text(),
+      dated: text(),
+      obtainedFrom: text(),
+      obtainedOn: text(),
+      createdBy: required(),
+      version: { ...whole(), defaultValue: 1 },
+      ...stamps(),
     },
     { sequelize, modelName: 'Sheet', tableName: 'sheets' },
   );
   Picture.init(
     {
-      id,
-      fileSha256: { ...required, field: 'file_sha256' },
-      pngSha256: { ...required, field: 'png_sha256' },
-      pixelsSha256: { ...required, field: 'pixels_sha256' },
-      originalName: required,
-      mediaType: required,
-      bytes: whole,
-      width: whole,
-      height: whole,
-      notes: required,
-      createdBy: required,
-      createdAt: date,
+      id: id(),
+      fileSha256: { ...required(), field: 'file_sha256' },
+      pngSha256: { ...required(), field: 'png_sha256' },
+      pixelsSha256: { ...required(), field: 'pixels_sha256' },
+      originalName: required(),
+      mediaType: required(),
+      bytes: whole(),
+      width: whole(),
+      height: whole(),
+      notes: required(),
+      createdBy: required(),
+      createdAt: date(),
     },
     { sequelize, modelName: 'Picture', tableName: 'pictures', updatedAt: false },
   );
   Page.init(
-    { id, sheetId: whole, pictureId: whole, position: whole, label: text, createdAt: date },
+    { id: id(), sheetId: whole(), pictureId: whole(), position: whole(), label: text(), createdAt: date() },
     { sequelize, modelName: 'Page', tableName: 'pages', updatedAt: false },
   );
   Module.belongsTo(Vendor, { foreignKey: 'vendorId', as: 'vendor' });

@@ -70,41 +70,42 @@ export class Decision extends Model<InferAttributes<Decision>, InferCreationAttr
   declare user?: NonAttribute<User>;
 }
 
-const id = { type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true };
-const required = { type: DataTypes.TEXT, allowNull: false };
-const whole = { type: DataTypes.INTEGER };
-const date = { type: DataTypes.DATE };
+// Functions: Sequelize writes into the objects it is given, so none may be shared.
+const id = () => ({ type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true });
+const required = () => ({ type: DataTypes.TEXT, allowNull: false });
+const whole = () => ({ type: DataTypes.INTEGER });
+const date = () => ({ type: DataTypes.DATE });
 
 export function initReadings(sequelize: Sequelize) {
   Reading.init(
     {
-      id,
-      moduleId: whole,
-      sheetId: whole,
-      ownerId: required,
-      state: required,
-      version: { ...whole, defaultValue: 1 },
-      document: required,
-      savedBy: required,
-      savedAt: date,
-      createdAt: date,
+      id: id(),
+      moduleId: whole(),
+      sheetId: whole(),
+      ownerId: required(),
+      state: required(),
+      version: { ...whole(), defaultValue: 1 },
+      document: required(),
+      savedBy: required(),
+      savedAt: date(),
+      createdAt: date(),
     },
     { sequelize, modelName: 'Reading', tableName: 'readings', updatedAt: false },
   );
   ReadingEditor.init(
-    { readingId: { ...whole, primaryKey: true }, userId: { type: DataTypes.TEXT, primaryKey: true } },
+    { readingId: { ...whole(), primaryKey: true }, userId: { type: DataTypes.TEXT, primaryKey: true } },
     { sequelize, modelName: 'ReadingEditor', tableName: 'reading_editors', timestamps: false },
   );
   ReadingPicture.init(
-    { readingId: { ...whole, primaryKey: true }, pictureId: { ...whole, primaryKey: true } },
+    { readingId: { ...whole(), primaryKey: true }, pictureId: { ...whole(), primaryKey: true } },
     { sequelize, modelName: 'ReadingPicture', tableName: 'reading_pictures', timestamps: false },
   );
   FittedModel.init(
-    { id, readingId: whole, moduleId: whole, document: required, result: required, engine: required, hash: required, createdAt: date },
+    { id: id(), readingId: whole(), moduleId: whole(), document: required(), result: required(), engine: required(), hash: required(), createdAt: date() },
     { sequelize, modelName: 'FittedModel', tableName: 'models', updatedAt: false },
   );
   Decision.init(
-    { id, readingId: whole, what: required, reason: DataTypes.TEXT, userId: required, modelId: whole, createdAt: date },
+    { id: id(), readingId: whole(), what: required(), reason: DataTypes.TEXT, userId: required(), modelId: whole(), createdAt: date() },
     { sequelize, modelName: 'Decision', tableName: 'decisions', updatedAt: false },
   );
   Reading.belongsTo(Module, { foreignKey: 'moduleId', as: 'module' });

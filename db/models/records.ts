@@ -29,32 +29,33 @@ export class Counter extends Model<InferAttributes<Counter>, InferCreationAttrib
   declare value: number;
 }
 
-const id = { type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true };
-const text = { type: DataTypes.TEXT };
-const date = { type: DataTypes.DATE };
+// Functions: Sequelize writes into the objects it is given, so none may be shared.
+const id = () => ({ type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true });
+const text = () => ({ type: DataTypes.TEXT });
+const date = () => ({ type: DataTypes.DATE });
 
 export function initRecords(sequelize: Sequelize) {
   TrailEntry.init(
-    { id, userId: text, action: text, object: text, detail: text, createdAt: date },
+    { id: id(), userId: text(), action: text(), object: text(), detail: text(), createdAt: date() },
     { sequelize, modelName: 'TrailEntry', tableName: 'trail', updatedAt: false },
   );
   QueuedMail.init(
     {
-      id,
-      recipient: text,
-      subject: text,
-      body: text,
-      state: text,
+      id: id(),
+      recipient: text(),
+      subject: text(),
+      body: text(),
+      state: text(),
       tries: DataTypes.INTEGER,
-      nextTryAt: date,
-      lastError: text,
-      createdAt: date,
-      sentAt: date,
+      nextTryAt: date(),
+      lastError: text(),
+      createdAt: date(),
+      sentAt: date(),
     },
     { sequelize, modelName: 'QueuedMail', tableName: 'mail_queue', updatedAt: false },
   );
   Counter.init(
-    { name: { ...text, primaryKey: true }, value: DataTypes.INTEGER },
+    { name: { ...text(), primaryKey: true }, value: DataTypes.INTEGER },
     { sequelize, modelName: 'Counter', tableName: 'counters', timestamps: false },
   );
   TrailEntry.belongsTo(User, { foreignKey: 'userId', as: 'user' });
