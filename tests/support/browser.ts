@@ -1,0 +1,63 @@
+import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
+import { afterAll, afterEach, beforeAll, expect, inject } from 'vitest';
+
+const QUIET = ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'];
+
+export const launch = (): Promise<Browser> =>
+  chromium.launch({ executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: QUIET });
+
+/** Two animation frames: Konva redraws its hit graph on the next one. */
+export const settle = (page: Page) =>
+  page.evaluate(() => new Promise<void>((done) => requestAnimationFrame(() => requestAnimationFrame(() => done()))));
+
+export interface Visitor {
+  readonly page: Page;
+  readonly context: BrowserContext;
+}
+
+/** Problem answers that a test provokes on purpose show up on the console; everything else there fails the test. */
+const EXPECTED = /the server responded with a status of 4\d\d/;
+
+/**
+ * A browser for a test file. `visit` opens a fresh person's window; whatever its pages complain about on the
+ * console, throw, or fetch from elsewhere fails the test.
+ */
+export function useBrowser() {
+  let browser: Browser;
+  let contexts: BrowserContext[] = [];
+  let complaints: string[] = [];
+  beforeAll(async () => {
+    browser = await launch();
+  });
+  afterAll(() => browser.close());
+  afterEach(async () => {
+    await Promise.all(contexts.map((context) => context.close()));
+    contexts = [];
+    const found = complaints;
+    complaints = [];
+    expect(found).toEqual([]);
+  });
+  const base = inject('baseUrl');
+  return {
+    base,
+    async visit(options: { width?: number; height?: number; dark?: boolean; touch?: boolean } = {}): Promise<Visitor> {
+      const context = await browser.newContext({
+        baseURL: base,
+        viewport: { width: options.width ?? 1440, height: options.height ?? 900 },
+        colorScheme: options.dark ? 'dark' : 'light',
+        hasTouch: options.touch ?? false,
+        permissions: ['clipboard-read', 'clipboard-write'],
+      });
+      contexts.push(context);
+      const page = await context.newPage();
+      page.on('pageerror', (error) => complaints.push(`error on the page: ${error.message}`));
+      page.on('console', (message) => {
+        if (message.type() === 'error' && !EXPECTED.test(message.text())) complaints.push(`console: ${message.text()}`);
+      });
+      page.on('request', (request) => {
+        if (/^https?:/.test(request.url()) && !request.url().startsWith(base)) complaints.push(`left the site: ${request.url()}`);
+      });
+      return { page, context };
+    },
+  };
+}
