@@ -38,33 +38,41 @@ export function pixelsSha256(width: number, height: number, rgb: Uint8Array): st
   return sha256(size, rgb);
 }
 
+interface Laid {
+  readonly rgb: Uint8Array;
+  /** Whether any pixel let the ground through. */
+  readonly transparent: boolean;
+}
+
 /** Four bytes a pixel on a white ground, to three. */
-function onWhite(rgba: Uint8Array): Uint8Array {
+function onWhite(rgba: Uint8Array): Laid {
   const rgb = new Uint8Array((rgba.length / 4) * 3);
+  let transparent = false;
   for (let from = 0, to = 0; from < rgba.length; from += 4, to += 3) {
     const alpha = rgba[from + 3] ?? 255;
+    transparent ||= alpha < 255;
     for (let channel = 0; channel < 3; channel++) {
       rgb[to + channel] = Math.round(((rgba[from + channel] ?? 0) * alpha + 255 * (255 - alpha)) / 255);
     }
   }
-  return rgb;
+  return { rgb, transparent };
 }
 
-function rgbOf({ samples, channels }: Decoded, colour: PngColour | null): Uint8Array {
+function rgbOf({ samples, channels }: Decoded, colour: PngColour | null): Laid {
   if (colour) return onWhite(toSrgb(samples, colour));
   if (samples instanceof Uint16Array) throw new Error('16-bit samples are decoded for their colour chunks only.');
-  return channels === 4 ? onWhite(samples) : samples;
+  return channels === 4 ? onWhite(samples) : { rgb: samples, transparent: false };
 }
 
-function notesOf(bytes: Uint8Array, header: Metadata, kind: MediaType, colour: PngColour | null): string[] {
+function notesOf(bytes: Uint8Array, header: Metadata, kind: MediaType, done: { transparent: boolean; recoloured: boolean }): string[] {
   const pages = header.pages ?? 1;
   const animatedPng = kind === 'image/png' && pngChunks(bytes).some(({ type }) => type === 'acTL');
   const notes: [boolean, string][] = [
     [animatedPng || (pages > 1 && kind !== 'image/tiff'), 'The picture is animated: only its first frame was taken.'],
     [pages > 1 && kind === 'image/tiff', `The file has ${pages} pages: only the first was taken.`],
     [(header.orientation ?? 1) > 1, 'The picture was turned upright as its camera noted.'],
-    [header.hasAlpha && !header.isOpaque, 'Transparent parts were laid on white.'],
-    [header.hasProfile || header.space === 'cmyk' || colour !== null, 'The colours were converted to sRGB.'],
+    [done.transparent, 'Transparent parts were laid on white.'],
+    [header.hasProfile || header.space === 'cmyk' || done.recoloured, 'The colours were converted to sRGB.'],
   ];
   return notes.filter(([applies]) => applies).map(([, note]) => note);
 }
@@ -79,7 +87,7 @@ export async function intake(bytes: Uint8Array): Promise<IntakePicture> {
   const colour = mediaType === 'image/png' ? pngColour(bytes) : null;
   const decoded = await decode(bytes, { deep: colour !== null && header.depth === 'ushort', alpha: colour !== null });
   const { width, height } = decoded;
-  const rgb = rgbOf(decoded, colour);
+  const { rgb, transparent } = rgbOf(decoded, colour);
   if (rgb.length !== width * height * 3) throw new Error(`Decoded ${rgb.length} bytes for ${width} × ${height} pixels.`);
   const png = barePng(await encodePng(rgb, width, height));
   return {
@@ -91,6 +99,6 @@ export async function intake(bytes: Uint8Array): Promise<IntakePicture> {
     pixelsSha256: pixelsSha256(width, height, rgb),
     pngSha256: sha256(png),
     mediaType,
-    notes: notesOf(bytes, header, mediaType, colour),
+    notes: notesOf(bytes, header, mediaType, { transparent, recoloured: colour !== null }),
   };
 }
