@@ -14,12 +14,11 @@ export interface ButtonProps extends Omit<AriaButtonProps, 'className' | 'style'
   className?: string;
 }
 
+const VARIANTS: Readonly<Record<ButtonVariant, string>> = { plain: '', primary: 'btn-primary', quiet: 'btn-quiet', danger: 'btn-danger' };
+
 export function Button({ variant = 'plain', size = 'medium', icon = false, className, children, ...rest }: ButtonProps) {
   return (
-    <AriaButton
-      {...rest}
-      className={classes('btn', variant !== 'plain' && `btn-${variant}`, size === 'small' && 'btn-small', icon && 'btn-icon', className)}
-    >
+    <AriaButton {...rest} className={classes('btn', VARIANTS[variant], size === 'small' && 'btn-small', icon && 'btn-icon', className)}>
       {children}
     </AriaButton>
   );
