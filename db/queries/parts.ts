@@ -1,6 +1,6 @@
 import { Op } from 'sequelize';
 import type { ModuleBody, ModuleIdentity, Rating as RatingView } from '@/lib/contracts';
-import { Module, Rating, Reading, Vendor } from '../models';
+import { Module, Rating, Reading, Vendor, type ReadingState } from '../models';
 
 export interface VendorRecord {
   readonly id: number;
@@ -14,7 +14,12 @@ export interface ModuleRecord extends ModuleIdentity {
   readonly version: number;
 }
 
-const whole = { include: [{ model: Vendor, as: 'vendor' }, { model: Rating, as: 'ratings' }] };
+const whole = {
+  include: [
+    { model: Vendor, as: 'vendor' },
+    { model: Rating, as: 'ratings' },
+  ],
+};
 
 const pair = (a: number | null, b: number | null): [number, number] | null => (a == null || b == null ? null : [a, b]);
 
@@ -91,7 +96,12 @@ export async function listModules(where: { readonly vendorId?: number } = {}): P
   return (await Module.findAll({ where, ...whole, order: ['partNumber', 'variant'] })).map(toModule);
 }
 
-export async function findModuleByIdentity(vendorId: number, partNumber: string, variant: string, except = 0): Promise<ModuleRecord | null> {
+export async function findModuleByIdentity(
+  vendorId: number,
+  partNumber: string,
+  variant: string,
+  except = 0,
+): Promise<ModuleRecord | null> {
   const row = await Module.findOne({ where: { vendorId, partNumber, variant, id: { [Op.ne]: except } }, ...whole });
   return row && toModule(row);
 }
@@ -117,4 +127,10 @@ export async function updateModule(id: number, version: number, vendorId: number
 /** How many readings stand on a module, by state. */
 export async function readingStatesOf(moduleId: number): Promise<string[]> {
   return (await Reading.findAll({ where: { moduleId }, attributes: ['state'] })).map((row) => row.state);
+}
+
+/** The states of the readings that stand on each of these modules. */
+export async function readingStatesByModule(moduleIds: readonly number[]): Promise<Map<number, ReadingState[]>> {
+  const rows = await Reading.findAll({ where: { moduleId: { [Op.in]: [...moduleIds] } }, attributes: ['moduleId', 'state'] });
+  return new Map(moduleIds.map((id) => [id, rows.filter((row) => row.moduleId === id).map((row) => row.state)]));
 }

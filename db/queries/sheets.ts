@@ -31,8 +31,15 @@ export interface SheetRecord extends Omit<SheetBody, 'vendor'> {
   readonly createdAt: Date;
 }
 
+/** A sheet in a list: how many pages it has and what is read from it. */
+export interface SheetSummary extends Omit<SheetRecord, 'pages'> {
+  readonly pages: number;
+  readonly readings: readonly { readonly module: string; readonly state: ReadingState }[];
+}
+
 export interface ReadingOfSheet {
   readonly id: number;
+  readonly moduleId: number;
   readonly module: string;
   readonly state: ReadingState;
   readonly ownerId: string;
@@ -77,12 +84,28 @@ const whole = {
   ],
 };
 
-export async function listSheets(): Promise<(SheetRecord & { readonly readings: number })[]> {
-  const [sheets, readings] = await Promise.all([
-    Sheet.findAll({ ...whole, order: [['createdAt', 'DESC'], ['id', 'DESC']] }),
-    Reading.findAll({ attributes: ['sheetId'] }),
+const partName = (module: Module | undefined) => [module?.partNumber, module?.variant].filter(Boolean).join(' ');
+
+/** Sheets, newest first, without their pictures. */
+export async function listSheets(where: { readonly vendorId?: number } = {}): Promise<SheetSummary[]> {
+  const rows = await Sheet.findAll({
+    where,
+    include: [{ model: Vendor, as: 'vendor' }],
+    order: [
+      ['createdAt', 'DESC'],
+      ['id', 'DESC'],
+    ],
+  });
+  const among = { sheetId: { [Op.in]: rows.map((row) => row.id) } };
+  const [pages, readings] = await Promise.all([
+    Page.findAll({ where: among, attributes: ['sheetId'] }),
+    Reading.findAll({ where: among, attributes: ['id', 'sheetId', 'state'], include: [{ model: Module, as: 'module' }] }),
   ]);
-  return sheets.map((row) => ({ ...toSheet(row), readings: readings.filter((reading) => reading.sheetId === row.id).length }));
+  return rows.map((row) => ({
+    ...toSheet(row),
+    pages: pages.filter((page) => page.sheetId === row.id).length,
+    readings: readings.filter((reading) => reading.sheetId === row.id).map(({ module, state }) => ({ module: partName(module), state })),
+  }));
 }
 
 export async function findSheet(id: number): Promise<SheetRecord | null> {
@@ -106,7 +129,7 @@ export async function updateSheet(id: number, version: number, vendorId: number,
 export async function readingsOfSheet(sheetId: number): Promise<ReadingOfSheet[]> {
   const rows = await Reading.findAll({
     where: { sheetId },
-    attributes: ['id', 'state', 'ownerId'],
+    attributes: ['id', 'moduleId', 'state', 'ownerId'],
     include: [
       { model: Module, as: 'module' },
       { model: User, as: 'owner' },
@@ -115,7 +138,8 @@ export async function readingsOfSheet(sheetId: number): Promise<ReadingOfSheet[]
   });
   return rows.map((row) => ({
     id: row.id,
-    module: [row.module?.partNumber, row.module?.variant].filter(Boolean).join(' '),
+    moduleId: row.moduleId,
+    module: partName(row.module),
     state: row.state,
     ownerId: row.ownerId,
     owner: row.owner?.name ?? '',

@@ -26,3 +26,13 @@ export const line = (max: number) =>
 export const paragraph = (max: number) => z.string().trim().max(max, `Keep this within ${max} characters.`);
 
 export const isoDate = z.union([z.literal(''), z.iso.date('Write the date as year-month-day, like 2026-03-15.')]);
+
+const PRINTED_DATE = 'Write the date as far as the sheet gives it: 2026-03-15, 2026-03 or 2026.';
+const isCalendarDay = (text: string) => text.length < 10 || z.iso.date().safeParse(text).success;
+
+/** A date as a sheet prints it: a day, a month, a year, or nothing. */
+export const printedDate = z
+  .string()
+  .trim()
+  .regex(/^(\d{4}(-(0[1-9]|1[0-2])(-\d{2})?)?)?$/, PRINTED_DATE)
+  .refine(isCalendarDay, PRINTED_DATE);

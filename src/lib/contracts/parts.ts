@@ -1,7 +1,8 @@
 import { z } from 'zod';
-import { idParams, instant, line, rowId, sha256, isoDate } from './common';
+import { idParams, instant, isoDate, line, printedDate, rowId, sha256 } from './common';
 
-const outOfRange = (what: string, unit: string, min: number, max: number) => `${what} must be between ${min} and ${max} ${unit}.`.replace(' .', '.');
+const outOfRange = (what: string, unit: string, min: number, max: number) =>
+  `${what} must be between ${min} and ${max} ${unit}.`.replace(' .', '.');
 const between = (what: string, unit: string, min: number, max: number) => {
   const sentence = outOfRange(what, unit, min, max);
   return z.number(`${what} must be a number, like 2.5.`).min(min, sentence).max(max, sentence);
@@ -31,8 +32,16 @@ const plate = z.tuple([between('The plate width', 'mm', 0.5, 500), between('The 
 export const moduleIdentity = z.strictObject({
   partNumber: line(80).min(1, 'Enter the part number as printed.'),
   variant: line(80).default(''),
-  stages: z.int('Stages must be a whole number, like 1.').min(1, 'A module has at least one stage.').max(8, 'A module has at most eight stages here.').nullable(),
-  couples: z.int('Couples must be a whole number, like 127.').min(1, 'A module has at least one couple.').max(5000, 'Couples must be at most 5000.').nullable(),
+  stages: z
+    .int('Stages must be a whole number, like 1.')
+    .min(1, 'A module has at least one stage.')
+    .max(8, 'A module has at most eight stages here.')
+    .nullable(),
+  couples: z
+    .int('Couples must be a whole number, like 127.')
+    .min(1, 'A module has at least one couple.')
+    .max(5000, 'Couples must be at most 5000.')
+    .nullable(),
   coldPlateMm: plate,
   hotPlateMm: plate,
   heightMm: between('The height', 'mm', 0.1, 200).nullable(),
@@ -85,7 +94,7 @@ export const sheetBody = z.strictObject({
   title: line(160).default(''),
   number: line(80).default(''),
   revision: line(40).default(''),
-  dated: isoDate.default(''),
+  dated: printedDate.default(''),
   obtainedFrom: line(300).default(''),
   obtainedOn: isoDate.default(''),
 });
@@ -95,7 +104,9 @@ export const sheetView = sheetBody.extend({
   id: rowId,
   vendorId: rowId,
   pages: z.array(pageView),
-  readings: z.array(z.strictObject({ id: rowId, module: z.string(), state: z.string(), owner: z.string() })),
+  readings: z.array(
+    z.strictObject({ id: rowId, moduleId: rowId, module: z.string(), state: z.string(), ownerId: z.string(), owner: z.string() }),
+  ),
   version: z.int(),
   createdAt: instant,
 });
@@ -103,6 +114,7 @@ export type SheetView = z.infer<typeof sheetView>;
 
 export const sheetRow = z.strictObject({
   id: rowId,
+  vendorId: rowId,
   vendor: z.string(),
   title: z.string(),
   number: z.string(),
@@ -110,17 +122,35 @@ export const sheetRow = z.strictObject({
   dated: z.string(),
   pages: z.int(),
   readings: z.int(),
+  modules: z.array(z.string()).describe('modules that are read from it'),
   createdAt: instant,
 });
 export type SheetRow = z.infer<typeof sheetRow>;
+
+export const sheetsQuery = z.strictObject({
+  q: line(200).default('').describe('words that must all occur in vendor, title, number, revision, date or a module read from it'),
+});
+
+/** A vendor's module with what may be done with it. */
+export const vendorModule = moduleView.extend({
+  approved: z.boolean().describe('has an approved model in the catalogue'),
+  mayEdit: z.boolean(),
+});
+export type VendorModule = z.infer<typeof vendorModule>;
+
+export const vendorDetail = z.strictObject({
+  id: rowId,
+  name: z.string(),
+  modules: z.array(vendorModule),
+  sheets: z.array(sheetRow).describe('those that may be seen'),
+});
+export type VendorDetail = z.infer<typeof vendorDetail>;
 
 export const pageParams = idParams.extend({ page: rowId });
 
 export const uploadAnswer = z.strictObject({
   page: pageView,
-  already: z
-    .array(z.strictObject({ sheetId: rowId, sheet: z.string() }))
-    .describe('other sheets that already hold this very file'),
+  already: z.array(z.strictObject({ sheetId: rowId, sheet: z.string() })).describe('other sheets that already hold this very file'),
 });
 export type UploadAnswer = z.infer<typeof uploadAnswer>;
 

@@ -16,7 +16,8 @@ import type { ModuleBody, ModuleView, VendorView } from '@/lib/contracts';
 import { requireCan, type SignedInPerson } from '../people';
 import { conflict, lostRace, notAllowed, notFound } from '../refusal';
 
-export const moduleName = (module: Pick<ModuleRecord, 'partNumber' | 'variant'>) => [module.partNumber, module.variant].filter(Boolean).join(' ');
+export const moduleName = (module: Pick<ModuleRecord, 'partNumber' | 'variant'>) =>
+  [module.partNumber, module.variant].filter(Boolean).join(' ');
 
 export const toModuleView = (module: ModuleRecord): ModuleView => ({ ...module, ratings: [...module.ratings] });
 
@@ -29,7 +30,10 @@ export async function moduleById(id: number): Promise<ModuleRecord> {
 }
 
 const alreadyThere = (module: ModuleRecord) =>
-  conflict(`${module.vendor.name} ${moduleName(module)} is already in the catalogue: use that one, or give this one a variant.`, 'module-exists');
+  conflict(
+    `${module.vendor.name} ${moduleName(module)} is already in the catalogue: use that one, or give this one a variant.`,
+    'module-exists',
+  );
 
 /** Adds a module as printed; vendor, part number and variant together are its identity. */
 export async function addModule(actor: SignedInPerson, body: ModuleBody): Promise<ModuleRecord> {
@@ -39,18 +43,26 @@ export async function addModule(actor: SignedInPerson, body: ModuleBody): Promis
     const there = await findModuleByIdentity(vendor.id, body.partNumber, body.variant);
     if (there) throw alreadyThere(there);
     const made = await createModule(vendor.id, body);
-    await addTrail({ userId: actor.id, action: 'added module', object: `module/${made}`, detail: { vendor: vendor.name, part: moduleName(body) } });
+    await addTrail({
+      userId: actor.id,
+      action: 'added module',
+      object: `module/${made}`,
+      detail: { vendor: vendor.name, part: moduleName(body) },
+    });
     return made;
   });
   return moduleById(id);
 }
 
+/** A reading that is still in its owner's hands, and so leaves its module to be corrected. */
+export const isOpen = (state: string) => state === 'draft' || state === 'returned';
+
 /** Whoever reads may correct a module until one of its readings was handed in; after that it is the librarian's. */
 async function requireMayEdit(actor: SignedInPerson, id: number): Promise<void> {
   if (can(actor, 'module.edit')) return;
   requireCan(actor, 'module.create');
-  const settled = (await readingStatesOf(id)).some((state) => state !== 'draft' && state !== 'returned');
-  if (settled) throw notAllowed('A reading of this module was handed in, so its identity and ratings are now a librarian’s to change.');
+  if (!(await readingStatesOf(id)).every(isOpen))
+    throw notAllowed('A reading of this module was handed in, so its identity and ratings are now a librarian’s to change.');
 }
 
 /** Changes identity and ratings of a module, over the named version only. */

@@ -26,7 +26,9 @@ const LONGEST_QUEUE = 16;
 const inTurn = pLimit(PARALLEL_INTAKES);
 
 const busy = () =>
-  new Refusal(503, 'busy', 'Many pictures are being taken in just now. Wait a moment and send this one again.', { headers: { 'Retry-After': '5' } });
+  new Refusal(503, 'busy', 'Many pictures are being taken in just now. Wait a moment and send this one again.', {
+    headers: { 'Retry-After': '5' },
+  });
 
 async function takeIn(file: UploadedFile): Promise<IntakePicture> {
   if (inTurn.pendingCount >= LONGEST_QUEUE) throw busy();
@@ -59,11 +61,17 @@ async function keepPicture(actor: SignedInPerson, file: UploadedFile): Promise<O
 
 const labelOf = (name: string) => name.replace(/\.[a-z0-9]{1,5}$/i, '');
 
-/** Takes a picture in as the next page of a sheet; says which other sheets hold the very same file. */
-export async function uploadPage(actor: SignedInPerson, sheetId: number, file: UploadedFile): Promise<UploadAnswer> {
+const cancelled = () => new Refusal(400, 'cancelled', 'The upload was cancelled, and nothing of it was kept on the sheet.');
+
+/**
+ * Takes a picture in as the next page of a sheet; says which other sheets hold the very same file.
+ * Whoever has gone away (`signal`) while the picture was taken in gets no page.
+ */
+export async function uploadPage(actor: SignedInPerson, sheetId: number, file: UploadedFile, signal?: AbortSignal): Promise<UploadAnswer> {
   requireCan(actor, 'sheet.upload');
   await sheetById(sheetId);
   const picture = await keepPicture(actor, file);
+  if (signal?.aborted) throw cancelled();
   const { pageId, pictureId } = await inTransaction(async () => {
     const there = await findPictureByFile(picture.fileSha256);
     const pictureId = there?.id ?? (await createPicture(picture));

@@ -1,8 +1,19 @@
-import { addTrail, createSheet, findSheet, inTransaction, listSheets, readingsOfSheet, updateSheet, vendorNamed, type SheetRecord } from '@db';
+import {
+  addTrail,
+  createSheet,
+  findSheet,
+  inTransaction,
+  listSheets,
+  readingsOfSheet,
+  updateSheet,
+  vendorNamed,
+  type SheetRecord,
+} from '@db';
 import { can } from '@/lib/access';
 import type { SheetBody, SheetRow, SheetView } from '@/lib/contracts';
 import { requireCan, type SignedInPerson } from '../people';
-import { lostRace, notFound } from '../refusal';
+import { lostRace, notFound, wrongInput } from '../refusal';
+import { matchesWords } from './search';
 import { toSheetRow, toSheetView } from './views';
 
 const SETTLED = new Set(['approved', 'superseded', 'withdrawn']);
@@ -13,9 +24,22 @@ export async function sheetById(id: number): Promise<SheetRecord> {
   return sheet;
 }
 
-export async function sheetList(actor: SignedInPerson): Promise<SheetRow[]> {
+const isSettled = ({ state }: { readonly state: string }) => SETTLED.has(state);
+
+/** Sheets that hold all the words, newest first; every sheet when there are none. */
+export async function sheetList(actor: SignedInPerson, words = ''): Promise<SheetRow[]> {
   requireCan(actor, 'sheet.see');
-  return (await listSheets()).map(toSheetRow);
+  return (await listSheets()).map(toSheetRow).filter((row) => matchesWords(row, words));
+}
+
+/** The sheets of a vendor that this person may see. */
+export async function sheetsSeen(actor: SignedInPerson, vendorId: number): Promise<SheetRow[]> {
+  const sheets = await listSheets({ vendorId });
+  const seen = sheets.filter((sheet) => can(actor, 'sheet.see', { approved: sheet.readings.some(isSettled) }));
+  return seen.map((sheet) => {
+    const readings = sheet.readings.filter((reading) => can(actor, 'reading.see', { approved: isSettled(reading) }));
+    return toSheetRow({ ...sheet, readings });
+  });
 }
 
 /** A sheet as this person may see it: without drafts for those who only see what is approved. */
@@ -39,6 +63,12 @@ export async function addSheet(actor: SignedInPerson, body: SheetBody): Promise<
   return sheetFor(actor, id);
 }
 
+/** A reading's module and its sheet are of one vendor. */
+async function requireNoReadings(sheet: SheetRecord): Promise<void> {
+  if ((await readingsOfSheet(sheet.id)).length === 0) return;
+  throw wrongInput({ vendor: `Modules of ${sheet.vendor.name} are being read from this sheet, so its vendor stays ${sheet.vendor.name}.` });
+}
+
 /** Changes what a sheet is, over the named version only. */
 export async function changeSheet(actor: SignedInPerson, id: number, version: number, body: SheetBody): Promise<SheetView> {
   requireCan(actor, 'sheet.edit');
@@ -46,6 +76,7 @@ export async function changeSheet(actor: SignedInPerson, id: number, version: nu
     const before = await sheetById(id);
     const { vendor: name, ...rest } = body;
     const vendor = await vendorNamed(name);
+    if (vendor.id !== before.vendor.id) await requireNoReadings(before);
     if (!(await updateSheet(id, version, vendor.id, rest))) throw lostRace(toSheetView(before, []));
     await addTrail({ userId: actor.id, action: 'changed sheet', object: `sheet/${id}` });
   });

@@ -1,4 +1,4 @@
-import type { PageRecord, PictureRecord, ReadingOfSheet, SheetRecord } from '@db';
+import type { PageRecord, PictureRecord, ReadingOfSheet, SheetRecord, SheetSummary } from '@db';
 import type { PageView, PictureView, SheetRow, SheetView } from '@/lib/contracts';
 
 export const pictureUrl = (id: number) => `/api/pictures/${id}`;
@@ -29,20 +29,22 @@ export const toSheetView = (sheet: SheetRecord, readings: readonly ReadingOfShee
   obtainedFrom: sheet.obtainedFrom,
   obtainedOn: sheet.obtainedOn,
   pages: sheet.pages.map(toPageView),
-  readings: readings.map(({ id, module, state, owner }) => ({ id, module, state, owner })),
+  readings: readings.map((reading) => ({ ...reading })),
   version: sheet.version,
   createdAt: sheet.createdAt.toISOString(),
 });
 
-export const toSheetRow = (sheet: SheetRecord & { readonly readings: number }): SheetRow => ({
+export const toSheetRow = (sheet: SheetSummary): SheetRow => ({
   id: sheet.id,
+  vendorId: sheet.vendor.id,
   vendor: sheet.vendor.name,
   title: sheet.title,
   number: sheet.number,
   revision: sheet.revision,
   dated: sheet.dated,
-  pages: sheet.pages.length,
-  readings: sheet.readings,
+  pages: sheet.pages,
+  readings: sheet.readings.length,
+  modules: [...new Set(sheet.readings.map((reading) => reading.module))],
   createdAt: sheet.createdAt.toISOString(),
 });
 

@@ -4,5 +4,5 @@ import { endpoint, readUpload } from '@/lib/server/http';
 import { uploadPage } from '@/lib/server/sheets';
 
 export const POST = endpoint(operations.addPage, async ({ actor, params, context }) =>
-  uploadPage(actor, params.id, await readUpload(context.request, config().maxUploadBytes)),
+  uploadPage(actor, params.id, await readUpload(context.request, config().maxUploadBytes), context.request.signal),
 );
