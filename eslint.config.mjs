@@ -10,7 +10,7 @@ export default defineConfig(
   js.configs.recommended,
   ts.configs.recommended,
   astro.configs.recommended,
-  reactHooks.configs.flat['recommended-latest'],
+  { files: ['src/components/**/*.{ts,tsx}'], ...reactHooks.configs.flat['recommended-latest'] },
   {
     rules: {
       '@typescript-eslint/consistent-type-imports': ['error', { fixStyle: 'inline-type-imports', prefer: 'type-imports' }],

@@ -54,7 +54,8 @@ export interface SelfCheck {
 const TRIED_SQLITE = /^3\.(5[2-9]|[6-9]\d)\./;
 const FULL = 2;
 
-const pragma = async (name: string) => Object.values((await connection().query<Record<string, string | number>>(`PRAGMA ${name}`, { type: QueryTypes.SELECT }))[0] ?? {})[0];
+const pragma = async (name: string) =>
+  Object.values((await connection().query<Record<string, string | number>>(`PRAGMA ${name}`, { type: QueryTypes.SELECT }))[0] ?? {})[0];
 
 async function settings(): Promise<SelfCheck> {
   const [version] = await connection().query<{ v: string }>('SELECT sqlite_version() AS v', { type: QueryTypes.SELECT });

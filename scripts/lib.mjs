@@ -47,7 +47,10 @@ export function install() {
 }
 
 const SOURCES = ['src', 'public', 'samples', 'scripts', 'astro.config.mjs', 'tailwind.config.mjs', 'tsconfig.json', 'package-lock.json'];
-const databaseSources = () => readdirSync('db').filter((name) => !name.includes('.sqlite')).map((name) => path.join('db', name));
+const databaseSources = () =>
+  readdirSync('db')
+    .filter((name) => !name.includes('.sqlite'))
+    .map((name) => path.join('db', name));
 
 export function build() {
   const latest = Math.max(...[...SOURCES, ...databaseSources()].map(newest));

@@ -34,7 +34,14 @@ function settleHeaders(request) {
   }
 }
 
-const end = (response, status) => response.writeHead(status, { 'X-Content-Type-Options': 'nosniff', 'Cache-Control': 'no-store', 'Content-Security-Policy': "default-src 'none'; frame-ancestors 'none'" }).end();
+const end = (response, status) =>
+  response
+    .writeHead(status, {
+      'X-Content-Type-Options': 'nosniff',
+      'Cache-Control': 'no-store',
+      'Content-Security-Policy': "default-src 'none'; frame-ancestors 'none'",
+    })
+    .end();
 
 const server = http.createServer((request, response) => {
   let pathname;
@@ -52,7 +59,9 @@ server.requestTimeout = 120_000;
 server.headersTimeout = MAX_BODY_HEADERS_MS;
 
 server.on('error', (error) => {
-  console.error(error.code === 'EADDRINUSE' ? `Port ${report.port} is taken. Stop what listens there, or set COUPLET_PORT.` : error.message);
+  console.error(
+    error.code === 'EADDRINUSE' ? `Port ${report.port} is taken. Stop what listens there, or set COUPLET_PORT.` : error.message,
+  );
   process.exit(1);
 });
 server.listen(report.port, report.host, () => {

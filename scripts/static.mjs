@@ -27,7 +27,9 @@ function list(folder, under = '') {
  * file system. Files with a hash in their name are kept for a year.
  */
 export function serveStatic(folder) {
-  const files = new Map(list(folder).map((name) => [name, { file: path.join(folder, name), size: statSync(path.join(folder, name)).size }]));
+  const files = new Map(
+    list(folder).map((name) => [name, { file: path.join(folder, name), size: statSync(path.join(folder, name)).size }]),
+  );
   return (request, response, pathname, secure) => {
     const found = files.get(pathname);
     if (!found || (request.method !== 'GET' && request.method !== 'HEAD')) return false;
@@ -49,7 +51,8 @@ export function serveStatic(folder) {
 
 function send(request, response, found, headers, packable) {
   const accepts = String(request.headers['accept-encoding'] ?? '');
-  const packer = packable && (accepts.includes('br') ? ['br', createBrotliCompress] : accepts.includes('gzip') ? ['gzip', createGzip] : null);
+  const packer =
+    packable && (accepts.includes('br') ? ['br', createBrotliCompress] : accepts.includes('gzip') ? ['gzip', createGzip] : null);
   response.writeHead(200, { ...headers, ...(packer ? { 'Content-Encoding': packer[0] } : { 'Content-Length': found.size }) });
   if (request.method === 'HEAD') return response.end();
   const stream = createReadStream(found.file);

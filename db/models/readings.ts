@@ -101,7 +101,16 @@ export function initReadings(sequelize: Sequelize) {
     { sequelize, modelName: 'ReadingPicture', tableName: 'reading_pictures', timestamps: false },
   );
   FittedModel.init(
-    { id: id(), readingId: whole(), moduleId: whole(), document: required(), result: required(), engine: required(), hash: required(), createdAt: date() },
+    {
+      id: id(),
+      readingId: whole(),
+      moduleId: whole(),
+      document: required(),
+      result: required(),
+      engine: required(),
+      hash: required(),
+      createdAt: date(),
+    },
     { sequelize, modelName: 'FittedModel', tableName: 'models', updatedAt: false },
   );
   Decision.init(

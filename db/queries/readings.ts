@@ -117,7 +117,16 @@ export async function listReadings(filter: {
     ...(filter.moduleId === undefined ? {} : { moduleId: filter.moduleId }),
     ...(filter.states === undefined ? {} : { state: { [Op.in]: [...filter.states] } }),
   };
-  return (await Reading.findAll({ where, ...whole, order: [['savedAt', 'DESC'], ['id', 'DESC']] })).map(toReading);
+  return (
+    await Reading.findAll({
+      where,
+      ...whole,
+      order: [
+        ['savedAt', 'DESC'],
+        ['id', 'DESC'],
+      ],
+    })
+  ).map(toReading);
 }
 
 export const countReadings = (states: readonly ReadingState[]): Promise<number> =>
@@ -174,12 +183,21 @@ export async function addDecision(decision: {
 }
 
 export async function decisionsOf(readingIds: readonly number[]): Promise<DecisionRecord[]> {
-  const rows = await Decision.findAll({ where: { readingId: { [Op.in]: [...readingIds] } }, include: [{ model: User, as: 'user' }], order: ['id'] });
+  const rows = await Decision.findAll({
+    where: { readingId: { [Op.in]: [...readingIds] } },
+    include: [{ model: User, as: 'user' }],
+    order: ['id'],
+  });
   return rows.map(toDecision);
 }
 
 export async function recentDecisions(what: readonly DecisionKind[], limit: number): Promise<DecisionRecord[]> {
-  const rows = await Decision.findAll({ where: { what: { [Op.in]: [...what] } }, include: [{ model: User, as: 'user' }], order: [['id', 'DESC']], limit });
+  const rows = await Decision.findAll({
+    where: { what: { [Op.in]: [...what] } },
+    include: [{ model: User, as: 'user' }],
+    order: [['id', 'DESC']],
+    limit,
+  });
   return rows.map(toDecision);
 }
 

@@ -29,7 +29,12 @@ export async function addTrail(entry: {
   readonly object?: string;
   readonly detail?: Readonly<Record<string, unknown>>;
 }): Promise<void> {
-  await TrailEntry.create({ userId: entry.userId, action: entry.action, object: entry.object ?? '', detail: JSON.stringify(entry.detail ?? {}) });
+  await TrailEntry.create({
+    userId: entry.userId,
+    action: entry.action,
+    object: entry.object ?? '',
+    detail: JSON.stringify(entry.detail ?? {}),
+  });
 }
 
 export async function listTrail(limit: number, before = Number.MAX_SAFE_INTEGER): Promise<TrailRecord[]> {
@@ -82,10 +87,9 @@ export async function markMailSent(id: number, now: Date): Promise<void> {
 }
 
 export async function markMailFailed(id: number, tries: number, nextTryAt: Date | null, lastError: string): Promise<void> {
-  await QueuedMail.update(
-    nextTryAt ? { state: 'queued', tries, nextTryAt, lastError } : { state: 'failed', tries, lastError },
-    { where: { id } },
-  );
+  await QueuedMail.update(nextTryAt ? { state: 'queued', tries, nextTryAt, lastError } : { state: 'failed', tries, lastError }, {
+    where: { id },
+  });
 }
 
 /** What a stopped process had in its hands, for the boot step to look at. */

@@ -28,7 +28,10 @@ async function untilUp(url: string, server: ChildProcess, said: () => string): P
   const deadline = Date.now() + START_MS;
   while (Date.now() < deadline) {
     if (server.exitCode !== null) throw new Error(`The server stopped at its start:\n${said()}`);
-    const up = await fetch(`${url}/api/health`).then((answer) => answer.ok, () => false);
+    const up = await fetch(`${url}/api/health`).then(
+      (answer) => answer.ok,
+      () => false,
+    );
     if (up) return;
     await new Promise((resolve) => setTimeout(resolve, 100));
   }
@@ -42,7 +45,14 @@ export default async function setup(project: TestProject) {
   const baseUrl = `http://localhost:${port}`;
   let output = '';
   const server = spawn(process.execPath, ['scripts/serve.mjs'], {
-    env: { ...process.env, NODE_ENV: 'production', COUPLET_PORT: String(port), COUPLET_DATA: data, COUPLET_LOG_LEVEL: 'error', COUPLET_DEMO_DATA: 'people' },
+    env: {
+      ...process.env,
+      NODE_ENV: 'production',
+      COUPLET_PORT: String(port),
+      COUPLET_DATA: data,
+      COUPLET_LOG_LEVEL: 'error',
+      COUPLET_DEMO_DATA: 'people',
+    },
     stdio: ['ignore', 'pipe', 'pipe'],
   });
   for (const stream of [server.stdout, server.stderr]) stream.on('data', (chunk: Buffer) => (output += chunk.toString()));

@@ -21,7 +21,10 @@ export const newPassword = z
   .min(PASSWORD_MIN_LENGTH, `Use at least ${PASSWORD_MIN_LENGTH} characters; three or four unrelated words do well.`)
   .max(PASSWORD_MAX_LENGTH, `Use at most ${PASSWORD_MAX_LENGTH} characters.`);
 
-export const changePasswordBody = z.strictObject({ current: z.string().min(1, 'Enter the password you have now.').max(PASSWORD_MAX_LENGTH), next: newPassword });
+export const changePasswordBody = z.strictObject({
+  current: z.string().min(1, 'Enter the password you have now.').max(PASSWORD_MAX_LENGTH),
+  next: newPassword,
+});
 
 export const sessionInfo = z.strictObject({
   id: z.string().describe('opaque handle of the session, not the cookie'),

@@ -29,9 +29,7 @@ export const readingView = z.strictObject({
   state: readingState,
   owner: who,
   module: moduleView,
-  sheets: z.array(
-    z.strictObject({ id: rowId, title: z.string(), number: z.string(), revision: z.string(), pages: z.array(pageView) }),
-  ),
+  sheets: z.array(z.strictObject({ id: rowId, title: z.string(), number: z.string(), revision: z.string(), pages: z.array(pageView) })),
   document: benchDocument,
   savedAt: instant,
   savedBy: who,
@@ -74,7 +72,12 @@ export const residual = z.strictObject({
 });
 export type Residual = z.infer<typeof residual>;
 
-export const fittedCurve = z.strictObject({ chart: z.int(), value: finite, points: z.array(px).describe('pixels of the picture') });
+export const fittedCurve = z.strictObject({
+  chart: z.int(),
+  curve: z.int(),
+  value: finite,
+  points: z.array(px).describe('pixels of the picture'),
+});
 export type FittedCurve = z.infer<typeof fittedCurve>;
 
 export const ratingBeside = z.strictObject({
@@ -89,7 +92,10 @@ export type RatingBeside = z.infer<typeof ratingBeside>;
 
 export const modelBody = z.strictObject({ document: benchDocument });
 export const modelAnswer = z.strictObject({
-  result: z.custom<ReadingResult>((value) => typeof value === 'object' && value !== null).nullable().describe('a couplet.result, version 1'),
+  result: z
+    .custom<ReadingResult>((value) => typeof value === 'object' && value !== null)
+    .nullable()
+    .describe('a couplet.result, version 1'),
   residuals: z.array(residual),
   curves: z.array(fittedCurve),
   ratings: z.array(ratingBeside),
@@ -104,3 +110,32 @@ export const returnBody = z.strictObject({ reason });
 export const stateAnswer = z.strictObject({ state: readingState, version: z.int() });
 export type StateAnswer = z.infer<typeof stateAnswer>;
 
+/** One reading that waits for a decision. */
+export const queueItem = readingRow.extend({
+  handedInAt: instant,
+  note: z.string(),
+  mayDecide: z.boolean().describe('false for one’s own work'),
+});
+export type QueueItem = z.infer<typeof queueItem>;
+
+/** One figure of the model beside that of the model it would supersede. */
+export const changeRow = z.strictObject({
+  what: z.string(),
+  unit: z.string(),
+  before: finite.nullable(),
+  after: finite.nullable(),
+  u: finite.nullable(),
+});
+export type ChangeRow = z.infer<typeof changeRow>;
+
+export const evidenceView = z.strictObject({
+  reading: readingView,
+  model: modelAnswer,
+  hash: z.string().nullable(),
+  handedInAt: instant.nullable(),
+  approved: z
+    .strictObject({ readingId: rowId, changes: z.array(changeRow) })
+    .nullable()
+    .describe('the model in the catalogue now, and what would change'),
+});
+export type EvidenceView = z.infer<typeof evidenceView>;

@@ -1,5 +1,5 @@
 import type { APIContext, APIRoute } from 'astro';
-import { z } from 'zod';
+import { type z } from 'zod';
 import { can } from '@/lib/access';
 import type { Operation } from '@/lib/contracts';
 import { log } from '../log';
@@ -80,7 +80,10 @@ export function fieldSentences(error: z.ZodError): Record<string, string> {
 }
 
 const pathName = (path: readonly PropertyKey[]) =>
-  path.reduce<string>((name, part) => (typeof part === 'number' ? `${name}[${part}]` : name ? `${name}.${String(part)}` : String(part)), '');
+  path.reduce<string>(
+    (name, part) => (typeof part === 'number' ? `${name}[${part}]` : name ? `${name}.${String(part)}` : String(part)),
+    '',
+  );
 
 async function readJson(request: Request): Promise<unknown> {
   const type = request.headers.get('content-type')?.split(';')[0]?.trim().toLowerCase();

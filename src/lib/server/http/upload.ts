@@ -15,7 +15,11 @@ const ENVELOPE_BYTES = 64 * 1024;
 const LONGEST_NAME = 200;
 
 const tooLarge = (limit: number) =>
-  new Refusal(413, 'too-large', `The file is larger than ${Math.floor(limit / 1024 / 1024)} MB. Save the page on its own, or at a lower resolution.`);
+  new Refusal(
+    413,
+    'too-large',
+    `The file is larger than ${Math.floor(limit / 1024 / 1024)} MB. Save the page on its own, or at a lower resolution.`,
+  );
 
 /** Reads one file, in the field `file`, from a multipart request through multer; refuses in sentences. */
 export async function readUpload(request: Request, maxBytes: number): Promise<UploadedFile> {
@@ -29,7 +33,8 @@ export async function readUpload(request: Request, maxBytes: number): Promise<Up
   }
   const incoming = asIncoming(request);
   await runMulter(incoming, maxBytes);
-  if (!incoming.file || incoming.file.size === 0) throw new Refusal(422, 'no-file', 'No file came with this, or it is empty. Choose a picture and send it again.');
+  if (!incoming.file || incoming.file.size === 0)
+    throw new Refusal(422, 'no-file', 'No file came with this, or it is empty. Choose a picture and send it again.');
   return { name: cleanName(incoming.file.originalname), bytes: incoming.file.buffer };
 }
 
@@ -58,4 +63,7 @@ function runMulter(incoming: MulterRequest, maxBytes: number): Promise<void> {
 
 /** The last part of a file name, without control characters: shown to people, never used as a path. */
 const cleanName = (name: string) =>
-  (name.split(/[\\/]/).at(-1) ?? '').replace(/\p{Cc}/gu, '').trim().slice(-LONGEST_NAME) || 'picture';
+  (name.split(/[\\/]/).at(-1) ?? '')
+    .replace(/\p{Cc}/gu, '')
+    .trim()
+    .slice(-LONGEST_NAME) || 'picture';

@@ -24,7 +24,9 @@ async function takeATry(limiter: RateLimiterMemory, key: string): Promise<void> 
   } catch (error) {
     if (!(error instanceof RateLimiterRes)) throw error;
     const seconds = Math.max(1, Math.ceil(error.msBeforeNext / 1000));
-    throw new Refusal(429, 'too-many-tries', `Too many tries. Wait ${seconds} s and try again.`, { headers: { 'Retry-After': String(seconds) } });
+    throw new Refusal(429, 'too-many-tries', `Too many tries. Wait ${seconds} s and try again.`, {
+      headers: { 'Retry-After': String(seconds) },
+    });
   }
 }
 
@@ -50,7 +52,10 @@ export async function signIn(attempt: {
   await deleteExpiredSessions(new Date());
   const session = await lucia().createSession(person.id, { agent: attempt.agent.slice(0, LONGEST_AGENT) });
   await addTrail({ userId: person.id, action: 'signed in' });
-  return { cookie: lucia().createSessionCookie(session.id), person: { id: person.id, email: person.email, name: person.name, roles: [...person.roles] } };
+  return {
+    cookie: lucia().createSessionCookie(session.id),
+    person: { id: person.id, email: person.email, name: person.name, roles: [...person.roles] },
+  };
 }
 
 /** Ends the session on the server and answers the cookie that forgets it. */

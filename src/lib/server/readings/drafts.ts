@@ -30,7 +30,9 @@ export async function startReading(actor: SignedInPerson, sheetId: number, modul
   return inTransaction(async () => {
     const [sheet, module] = await Promise.all([sheetById(sheetId), moduleById(moduleId)]);
     if (sheet.vendor.id !== module.vendor.id)
-      throw wrongInput({ moduleId: `The sheet is ${sheet.vendor.name}’s and the module ${module.vendor.name}’s: choose a module of the same vendor.` });
+      throw wrongInput({
+        moduleId: `The sheet is ${sheet.vendor.name}’s and the module ${module.vendor.name}’s: choose a module of the same vendor.`,
+      });
     const id = await createReading({ moduleId, sheetId, ownerId: actor.id, document: JSON.stringify(emptyDocument()) });
     await addEditor(id, actor.id);
     await addTrail({ userId: actor.id, action: 'started reading', object: `reading/${id}` });
@@ -72,7 +74,13 @@ export async function readingView(actor: SignedInPerson, id: number): Promise<Re
     module: toModuleView(reading.module),
     sheets: shown
       .sort((a, b) => Number(b.id === reading.sheetId) - Number(a.id === reading.sheetId))
-      .map((sheet) => ({ id: sheet.id, title: sheet.title, number: sheet.number, revision: sheet.revision, pages: sheet.pages.map(toPageView) })),
+      .map((sheet) => ({
+        id: sheet.id,
+        title: sheet.title,
+        number: sheet.number,
+        revision: sheet.revision,
+        pages: sheet.pages.map(toPageView),
+      })),
     document: documentOf(reading),
     savedAt: reading.savedAt.toISOString(),
     savedBy: reading.savedBy,
@@ -103,7 +111,9 @@ async function requirePictures(document: BenchDocument): Promise<number[]> {
   document.charts.forEach((chart, at) => {
     const picture = pictures.get(chart.pictureId);
     if (picture?.pixelsSha256 !== chart.pixelsSha256 || picture.width !== chart.width || picture.height !== chart.height)
-      throw wrongInput({ [`document.charts[${at}].pictureId`]: 'This chart names a picture that is not here: add the chart again from a page of the sheet.' });
+      throw wrongInput({
+        [`document.charts[${at}].pictureId`]: 'This chart names a picture that is not here: add the chart again from a page of the sheet.',
+      });
   });
   return ids;
 }
@@ -116,7 +126,8 @@ export async function saveReading(actor: SignedInPerson, id: number, version: nu
   const text = JSON.stringify(document);
   return inTransaction(async () => {
     const reading = await readingTo('reading.edit', actor, id);
-    if (!EDITABLE.has(reading.state)) throw conflict('This reading was handed in, so it rests. Take it back to go on with it.', 'not-a-draft');
+    if (!EDITABLE.has(reading.state))
+      throw conflict('This reading was handed in, so it rests. Take it back to go on with it.', 'not-a-draft');
     if (reading.document === text) return saved(reading);
     if (reading.version !== version) throw lostRace(current(reading));
     const pictureIds = await requirePictures(document);
