@@ -1,0 +1,60 @@
+import {
+  constantModule,
+  currentForHeat,
+  currentForMostHeat,
+  maximaAtHotSide,
+  type ModuleConstants,
+  type ThermoelectricModule,
+} from '@/lib/module';
+import type { Kelvin } from '@/lib/units';
+import type { CandidateModel } from './types';
+
+/** Slopes at one state. */
+export interface Slopes {
+  /** ∂Qc/∂I in W/A and ∂V/∂I in V/A. */
+  readonly heatPerA: number;
+  readonly voltPerA: number;
+  /** Gradients of Qc and V at a fixed current by the parameters and then by what the form leaves of heat and of voltage. */
+  readonly heat: readonly number[];
+  readonly voltage: readonly number[];
+}
+
+/** What the search asks of a form of the model, whatever stands behind it. Current in A, faces in K. */
+export interface Form {
+  readonly module: ThermoelectricModule;
+  /** The smaller current that pumps this heat (W), or null where none does. */
+  currentForHeat(heatW: number, Tc: Kelvin, Th: Kelvin): number | null;
+  /** The current of most heat, A. */
+  currentForMostHeat(Tc: Kelvin, Th: Kelvin): number;
+  /** The current at this voltage (V), A. */
+  currentForVoltage(voltageV: number, Tc: Kelvin, Th: Kelvin): number;
+  /** Current of the largest ΔT (A) and largest ΔT (K) with the hot face at Th. */
+  largestDeltaT(Th: Kelvin): { readonly currentA: number; readonly deltaTK: number };
+  slopes(I: number, Tc: Kelvin, Th: Kelvin): Slopes;
+}
+
+/** The constant form, exact: heat and voltage are linear in α, R and K (see `constantModule`). */
+function constantForm(constants: ModuleConstants): Form {
+  const { alpha, R } = constants;
+  return {
+    module: constantModule(constants),
+    currentForHeat: (heatW, Tc, Th) => currentForHeat(constants, heatW, Tc, Th),
+    currentForMostHeat: (Tc) => currentForMostHeat(constants, Tc),
+    currentForVoltage: (voltageV, Tc, Th) => (voltageV - alpha * (Th - Tc)) / R,
+    largestDeltaT: (Th) => {
+      const { imaxLargestDeltaT, dTmaxK } = maximaAtHotSide(constants, Th);
+      return { currentA: imaxLargestDeltaT, deltaTK: dTmaxK };
+    },
+    slopes: (I, Tc, Th) => ({
+      heatPerA: alpha * Tc - I * R,
+      voltPerA: R,
+      heat: [Tc * I, -(I * I) / 2, Tc - Th, 1, 0],
+      voltage: [Th - Tc, I, 0, 0, 1],
+    }),
+  };
+}
+
+/** The form of a candidate's model. */
+export function formOf({ parameters: [alpha, R, K] }: Pick<CandidateModel, 'form' | 'parameters'>): Form {
+  return constantForm({ alpha, R, K });
+}
