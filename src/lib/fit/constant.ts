@@ -1,0 +1,91 @@
+import { gaussNewton, largerCovariance, solveLeastSquares, weakestCombination } from '@/lib/numeric';
+import type { LinearFit, NonlinearFit, SolvedFit, Vector } from '@/lib/numeric';
+import { checkObservations } from './check';
+import { gapOf, tooLittle } from './missing';
+import { modelOf, problemOf, tripleOf, type Triple } from './problem';
+import { remainderOf } from './residuals';
+import { startConstants } from './start';
+import { constantsOf, type FitOutcome, type Observation } from './types';
+import { MISFIT_FLOOR } from './weights';
+
+/** How a fit may differ from the usual one. */
+export interface FitOptions {
+  /** Share of the axis range granted to every point beside its reading uncertainty; 0.005 when left out. */
+  readonly misfitFloor?: number | undefined;
+}
+
+/** Beyond this condition of the design, columns of length one, the constants hang on rounding. */
+const LARGEST_CONDITION = 1e5;
+/** A combination of the constants less certain than this share of itself counts as not determined (a choice, no source). */
+const LARGEST_RELATIVE_UNCERTAINTY = 0.5;
+
+const CHECK = 'check the quantities, the units, the values of the curves and which side is held.';
+const TOO_FEW = 'Three constants need at least three points: put more points on the curves.';
+const UNANSWERABLE = `No module can show all of these points: ${CHECK}`;
+const UNSETTLED = `The fit did not settle on one answer: ${CHECK}`;
+
+/**
+ * Fits α (V/K), R (ohm) and K (W/K) to all charts of a reading together. Heat, power and voltage at a given current are
+ * linear in them and solved at once; COP, current and anything at a given voltage go on by Gauss-Newton.
+ *
+ * Weights are 1/(u² + (floor · axis range)²), those of one curve together at most those of fifteen points. The covariance is
+ * that of the weights, (XᵀWX)⁻¹, or the sandwich by curve of K.-Y. Liang and S. L. Zeger (see `solveLeastSquares`), in every
+ * direction the larger of both: points of one curve share their line and their marks and are not independent.
+ *
+ * Where rank, condition or covariance say that the charts do not determine all three, where they contradict each other or the
+ * iteration does not settle, the outcome is one sentence and no number. Throws a RangeError for what is no observation:
+ * not finite, without range, or with both or neither of I and V.
+ */
+export function fitConstant(observations: readonly Observation[], { misfitFloor = MISFIT_FLOOR }: FitOptions = {}): FitOutcome {
+  checkObservations(observations);
+  const used = observations.filter(({ omitted }) => omitted !== true);
+  if (used.length < 3) return refuse(gapOf(used) ?? TOO_FEW, null);
+  const problem = problemOf(used, misfitFloor);
+  const start = startConstants(used, problem.weights);
+  if (start === null) return refuse(UNANSWERABLE, null);
+  const first = solveLeastSquares({ ...problem, rows: modelOf(start, used)!.jacobian });
+  const gap = gapOf(used);
+  if (gap !== null) return refuse(gap, first);
+  if (first.status !== 'solved') return refuse(tooLittle(used, relativeTo(tripleOf(start), first.weakest)), first);
+  const solution = gaussNewton({ ...problem, start: tripleOf(start) });
+  const refusal = refusalOf(solution, used);
+  return refusal ?? { ok: true, fit: { ...describe(solution), ...remainderOf(constantsAt(solution), observations, misfitFloor) } };
+}
+
+const constantsAt = ({ parameters }: NonlinearFit) => constantsOf({ parameters: parameters as Triple });
+
+const relativeTo = (parameters: Vector, direction: Vector | null) =>
+  direction && direction.map((part, j) => part / Math.abs(parameters[j]!));
+
+const refuse = (missing: string, linear: LinearFit | null): FitOutcome => ({
+  ok: false,
+  missing,
+  rank: linear?.rank ?? 0,
+  condition: linear?.condition ?? Infinity,
+});
+
+/** What speaks against a solution, gravest first; null when nothing does. */
+function refusalOf({ status, parameters, linear }: NonlinearFit, used: readonly Observation[]): FitOutcome | null {
+  if (linear?.status !== 'solved') return refuse(tooLittle(used, relativeTo(parameters, linear?.weakest ?? null)), linear);
+  const weakest = weakestCombination(parameters, linear.covariance);
+  if (linear.condition > LARGEST_CONDITION || weakest.u > LARGEST_RELATIVE_UNCERTAINTY) {
+    return refuse(tooLittle(used, weakest.direction), linear);
+  }
+  if (status !== 'converged') return refuse(UNSETTLED, linear);
+  const impossible = ['Seebeck coefficient', 'resistance', 'thermal conductance'].filter((_, j) => !(parameters[j]! > 0));
+  return impossible.length === 0 ? null : refuse(`Together these charts give no positive ${impossible.join(' and ')}: ${CHECK}`, linear);
+}
+
+function describe({ parameters, linear, iterations, status, why }: NonlinearFit) {
+  const { covariance, clusterCovariance, rank, condition } = linear as SolvedFit;
+  return {
+    form: 'constant' as const,
+    parameters: parameters as Triple,
+    covariance: clusterCovariance ? largerCovariance(covariance, clusterCovariance) : covariance,
+    rank,
+    condition,
+    iterations,
+    converged: status === 'converged',
+    why,
+  };
+}
