@@ -1,3 +1,4 @@
+/** From what a person told the program about a module's charts to values, model and predictions; the same on the server, in a browser and in the command. */
 export { readingDocument } from './document';
 export type {
   ReadingAxis,
@@ -10,7 +11,15 @@ export type {
   ReadingPrediction,
   ReadingRating,
 } from './document';
+export { fitReading, type FittedReading } from './fit-reading';
+export { framesOf, marksOf, type FramesOutcome } from './frames';
+export { hashMaterial, type HashMaterial } from './hash-material';
+export { toleranceOf } from './model';
+export { observationsOf, POINT_UNCERTAINTY_PX, type Observations } from './observations';
+export { parseReadingDocument, type ParsedDocument } from './parse';
 export { QUANTITIES, RATING_KEYS, UNITS, type RatingKey } from './quantities';
+export { read, readWithFit, type Picture, type ReadingHost, type ReadWithFit } from './read';
+export { PictureRefused, ReadingRefused, type Refusal } from './refused';
 export { ENGINE } from './result';
 export type {
   DerivedRatings,
@@ -25,3 +34,4 @@ export type {
   ReadPrediction,
   Validity,
 } from './result';
+export { rolesOf, type ChartQuantities, type ChartRoles, type Place, type RolesOutcome } from './roles';

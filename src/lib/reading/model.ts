@@ -1,0 +1,67 @@
+import { constantsOf, impliedRatings, type ConstantFit, type Observation } from '@/lib/fit';
+import { kelvin, toCelsius } from '@/lib/units';
+import type { ReadingDocument, ReadingModule } from './document';
+import type { DerivedRatings, ReadingModel, Validity } from './result';
+import { tidyAll } from './tidy';
+
+/** A model of constants is believed this far on either side of the hot sides of its charts, K (a choice, no source). */
+const HOT_SIDE_MARGIN_K = 10;
+
+const rangeOf = (values: readonly number[]): [number, number] =>
+  values.reduce<[number, number]>(([low, high], value) => [Math.min(low, value), Math.max(high, value)], [Infinity, -Infinity]);
+
+/** The ranges that the curves cover; current and difference reach down to zero, hot sides a margin further. */
+function validityOf(fit: ConstantFit, observations: readonly Observation[]): Validity {
+  const { alpha, R } = constantsOf(fit);
+  const currentAt = ({ I, V, Tc, Th }: Observation) => I ?? ((V ?? NaN) - alpha * (Th - Tc)) / R;
+  const [coldest, warmest] = rangeOf(observations.map(({ Th }) => toCelsius(kelvin(Th))));
+  return {
+    I: rangeOf([0, ...observations.map(currentAt)]),
+    deltaT: rangeOf([0, ...observations.map(({ Tc, Th }) => Th - Tc)]),
+    hotSideC: [coldest - HOT_SIDE_MARGIN_K, warmest + HOT_SIDE_MARGIN_K],
+  };
+}
+
+/** Hot sides that charts and ratings name, each once, coldest first. */
+function hotSidesOf({ charts, module }: ReadingDocument): number[] {
+  const named = [...charts, ...(module.rated ?? [])].flatMap(({ hotSideC }) => hotSideC ?? []);
+  return [...new Set(named)].sort((a, b) => a - b);
+}
+
+function derivedAt(fit: ConstantFit, hotSideC: number): DerivedRatings {
+  const { imaxLargestDeltaT, imaxMostHeat, qmaxW, dTmaxK, vmaxV, Z } = impliedRatings(fit, hotSideC);
+  return { hotSideC, imaxLargestDeltaT, imaxMostHeat, qmaxW, dTmaxK, vmaxV, Z };
+}
+
+/** The widest delivery tolerance the ratings state, percent; null when they state none. */
+export function toleranceOf({ rated }: ReadingModule): number | null {
+  const stated = (rated ?? []).flatMap(({ tolerancePercent }) => tolerancePercent ?? []);
+  return stated.length === 0 ? null : Math.max(...stated);
+}
+
+const NAMES = [
+  { name: 'alpha', unit: 'V/K' },
+  { name: 'R', unit: 'ohm' },
+  { name: 'K', unit: 'W/K' },
+] as const;
+
+/** The model of a reading as the result document has it. */
+export function describeModel(document: ReadingDocument, fit: ConstantFit, observations: readonly Observation[]): ReadingModel {
+  const entry = (at: 0 | 1 | 2) => ({ value: fit.parameters[at], u: Math.sqrt(fit.covariance[at]?.[at] ?? NaN), unit: NAMES[at].unit });
+  return tidyAll<ReadingModel>({
+    form: 'constant',
+    grade: 'curves',
+    at: 'effective',
+    alpha: entry(0),
+    R: entry(1),
+    K: entry(2),
+    temperature: { alphaPerK: 0, RPerK: 0, KPerK: 0 },
+    parameters: NAMES.map(({ name, unit }, at) => ({ name, value: fit.parameters[at] ?? NaN, unit })),
+    covariance: fit.covariance,
+    rmsPercentOfQmax: fit.rmsPercentOfQmax,
+    rmsPercentOfVmax: fit.rmsPercentOfVmax,
+    tolerancePercent: toleranceOf(document.module),
+    validity: validityOf(fit, observations),
+    derived: hotSidesOf(document).map((hotSideC) => derivedAt(fit, hotSideC)),
+  });
+}
