@@ -11,6 +11,7 @@ export type {
   ReadingPrediction,
   ReadingRating,
 } from './document';
+export { familyCurves, type FamilyCurve } from './family';
 export { fitReading, type FittedReading } from './fit-reading';
 export { framesOf, marksOf, type FramesOutcome } from './frames';
 export { hashMaterial, type HashMaterial } from './hash-material';
