@@ -1,3 +1,4 @@
+import { checkAgainstDescription } from './contract';
 import { PASSWORD, PEOPLE, type Who } from './people';
 
 /** An API client that keeps its cookie and sends what a browser of the same site sends. */
@@ -19,6 +20,7 @@ export function client(base: string) {
     });
     const set = answer.headers.getSetCookie().find((line) => line.startsWith('couplet='));
     if (set) cookie = set.split(';')[0] ?? '';
+    await checkAgainstDescription(base, method, path.split('?')[0] ?? path, answer);
     return answer;
   };
   return {

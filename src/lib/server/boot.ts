@@ -2,6 +2,7 @@ import { mkdirSync } from 'node:fs';
 import path from 'node:path';
 import { closeDatabase, countPeople, migrate, openDatabase, selfCheck, useRollbackJournal } from '@db';
 import { config } from './config';
+import { requeueMailInHand } from './mail';
 import { DEMO_PASSWORD, DEMO_PEOPLE, seedPeople } from './demo/people';
 
 /** What a start has to tell. */
@@ -35,6 +36,7 @@ export async function boot(): Promise<BootReport> {
     await useRollbackJournal();
     const migrated = await migrate();
     await selfCheck();
+    await requeueMailInHand();
     const empty = (await countPeople()) === 0;
     if (empty && settings.demo) {
       await seedPeople();

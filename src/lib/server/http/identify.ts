@@ -1,6 +1,7 @@
 import type { MiddlewareHandler } from 'astro';
 import { ensureDatabase } from '@db';
 import { config } from '../config';
+import { keepMailGoing } from '../mail';
 import { lucia, sessionOf } from '../people';
 
 /** Set by the page itself when somebody chooses; absent means what the device says. */
@@ -10,6 +11,7 @@ const THEME_COOKIE = 'theme';
 export const identify: MiddlewareHandler = async (context, next) => {
   const { cookies, locals } = context;
   ensureDatabase(config().databaseFile);
+  keepMailGoing();
   locals.actor = null;
   locals.session = null;
   const theme = cookies.get(THEME_COOKIE)?.value;
