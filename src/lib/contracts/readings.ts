@@ -90,12 +90,23 @@ export const ratingBeside = z.strictObject({
 });
 export type RatingBeside = z.infer<typeof ratingBeside>;
 
+/** How the equations of the fit stood: full rank and a small condition number mean that the charts tell all parameters apart. */
+export const fitNumbers = z.strictObject({
+  rank: z.int(),
+  condition: finite.nullable(),
+  iterations: z.int(),
+  converged: z.boolean(),
+  why: z.string(),
+});
+export type FitNumbers = z.infer<typeof fitNumbers>;
+
 export const modelBody = z.strictObject({ document: benchDocument });
 export const modelAnswer = z.strictObject({
   result: z
     .custom<ReadingResult>((value) => typeof value === 'object' && value !== null)
     .nullable()
     .describe('a couplet.result, version 1'),
+  fit: fitNumbers.nullable(),
   residuals: z.array(residual),
   curves: z.array(fittedCurve),
   ratings: z.array(ratingBeside),

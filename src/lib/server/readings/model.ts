@@ -1,5 +1,5 @@
 import type { ModuleRecord } from '@db';
-import type { FittedCurve, ModelAnswer, RatingBeside, Residual } from '@/lib/contracts';
+import type { FitNumbers, FittedCurve, ModelAnswer, RatingBeside, Residual } from '@/lib/contracts';
 import type { BenchDocument, ChartOrigin } from '@/lib/editor';
 import { familyCurves, type DerivedRatings, type ReadingResult } from '@/lib/reading';
 import type { SignedInPerson } from '../people';
@@ -70,11 +70,18 @@ export function ratingsBeside(module: Pick<ModuleRecord, 'ratings'>, result: Rea
   });
 }
 
+function fitNumbers({ read }: FittedDraft): FitNumbers | null {
+  if (!read?.fit) return null;
+  const { rank, condition, iterations, converged, why } = read.fit;
+  return { rank, condition: Number.isFinite(condition) ? condition : null, iterations, converged, why };
+}
+
 /** Everything about a fitted draft in the draft's own numbering. */
 export function toModelAnswer(draft: BenchDocument, module: Pick<ModuleRecord, 'ratings'>, fitted: FittedDraft): ModelAnswer {
   const result = fitted.read?.result ?? null;
   return {
     result,
+    fit: fitNumbers(fitted),
     residuals: residuals(draft, fitted),
     curves: family(draft, fitted),
     ratings: ratingsBeside(module, result),
