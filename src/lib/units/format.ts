@@ -51,10 +51,11 @@ export function formatNumber(value: number | null | undefined, { digits, decimal
   if (value == null || !Number.isFinite(value)) return NOT_STATED;
   if (decimals !== undefined) return typeset(value.toFixed(decimals));
   const significant = digits ?? DEFAULT_DIGITS;
-  const power = leadingPower(value, significant);
+  const [mantissa = '', exponent] = value.toExponential(significant - 1).split('e');
+  const power = Number(exponent);
   const shown = digits === undefined ? trimZeros : (text: string) => text;
   if (isPlainPower(power)) return typeset(shown(roundTo(value, significant - 1 - power)));
-  return typeset(shown((value / 10 ** power).toFixed(significant - 1))) + timesTenTo(power);
+  return typeset(shown(mantissa)) + timesTenTo(power);
 }
 
 /** A number with its unit behind a no-break space; a number of unit `1` stands alone, what is missing prints as an en dash without unit. */
