@@ -27,5 +27,7 @@ export function parameterCovariance(kind: FrameKind, parameters: readonly number
   const lengths = parameters.map((_, column) => jacobian.getColumnVector(column).norm('frobenius'));
   lengths.forEach((length, column) => jacobian.mulColumn(column, 1 / length));
   const scaled = inverse(jacobian.transpose().mmul(jacobian), true).to2DArray();
-  return scaled.map((row, i) => row.map((value, j) => (u * u * value) / ((lengths[i] ?? 1) * (lengths[j] ?? 1))));
+  // rounding leaves the inverse unsymmetric in its last bit
+  const even = (i: number, j: number) => ((scaled[i]?.[j] ?? 0) + (scaled[j]?.[i] ?? 0)) / 2;
+  return lengths.map((one, i) => lengths.map((other, j) => (u * u * even(i, j)) / (one * other)));
 }

@@ -10,14 +10,23 @@ const HOT_SIDE_MARGIN_K = 10;
 const rangeOf = (values: readonly number[]): [number, number] =>
   values.reduce<[number, number]>(([low, high], value) => [Math.min(low, value), Math.max(high, value)], [Infinity, -Infinity]);
 
+/** A lower end this near to zero, as a share of the range, is zero read with a trembling hand. */
+const NEARLY_ZERO = 0.01;
+
+/** From zero, or from below it where points really lie there. */
+function fromZero(values: readonly number[]): [number, number] {
+  const [low, high] = rangeOf([0, ...values]);
+  return [low > -NEARLY_ZERO * high ? 0 : low, high];
+}
+
 /** The ranges that the curves cover; current and difference reach down to zero, hot sides a margin further. */
 function validityOf(fit: ConstantFit, observations: readonly Observation[]): Validity {
   const { alpha, R } = constantsOf(fit);
   const currentAt = ({ I, V, Tc, Th }: Observation) => I ?? ((V ?? NaN) - alpha * (Th - Tc)) / R;
   const [coldest, warmest] = rangeOf(observations.map(({ Th }) => toCelsius(kelvin(Th))));
   return {
-    I: rangeOf([0, ...observations.map(currentAt)]),
-    deltaT: rangeOf([0, ...observations.map(({ Tc, Th }) => Th - Tc)]),
+    I: fromZero(observations.map(currentAt)),
+    deltaT: fromZero(observations.map(({ Tc, Th }) => Th - Tc)),
     hotSideC: [coldest - HOT_SIDE_MARGIN_K, warmest + HOT_SIDE_MARGIN_K],
   };
 }
