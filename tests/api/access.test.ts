@@ -46,6 +46,13 @@ const TABLE: Record<OperationName, readonly Who[]> = {
   restore: [L],
   review: [L],
   evidence: [E, L, D, A],
+  mail: [A],
+  trail: [A],
+  people: [A],
+  addPerson: [A],
+  changeRoles: [A],
+  disablePerson: [A],
+  enablePerson: [A],
 };
 
 const NOWHERE = '999999';

@@ -1,6 +1,6 @@
 import { can, type Action, type Actor } from '@/lib/access';
 
-export type Section = 'today' | 'sheets' | 'review' | 'catalogue' | 'duty' | 'outbox' | 'trail' | 'account';
+export type Section = 'today' | 'sheets' | 'review' | 'catalogue' | 'duty' | 'team' | 'outbox' | 'trail' | 'account';
 
 interface Entry {
   readonly section: Section;
@@ -15,6 +15,7 @@ const ENTRIES: readonly Entry[] = [
   { section: 'review', label: 'Review', href: '/review', needs: 'review.see' },
   { section: 'catalogue', label: 'Catalogue', href: '/catalogue', needs: 'catalogue.see' },
   { section: 'duty', label: 'Duty', href: '/duty', needs: 'duty.search' },
+  { section: 'team', label: 'Team', href: '/admin/team', needs: 'team.manage' },
   { section: 'outbox', label: 'Outbox', href: '/admin/outbox', needs: 'outbox.see' },
   { section: 'trail', label: 'Trail', href: '/admin/trail', needs: 'trail.see' },
 ];

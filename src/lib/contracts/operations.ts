@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { addedPerson, addPersonBody, mailItem, member, personParams, rolesBody, trailPage, trailQuery } from './admin';
 import { idParams, rowId } from './common';
 import { operation } from './operation';
 import {
@@ -391,6 +392,80 @@ export const operations = {
     params: idParams,
     status: 200,
     answer: evidenceView,
+  }),
+
+  mail: operation({
+    method: 'GET',
+    path: '/api/mail',
+    tag: 'administration',
+    summary: 'The mail outbox, newest first',
+    may: 'outbox.see',
+    status: 200,
+    answer: z.array(mailItem),
+  }),
+  trail: operation({
+    method: 'GET',
+    path: '/api/trail',
+    tag: 'administration',
+    summary: 'Who did what and when, newest first, a page at a time',
+    may: 'trail.see',
+    query: trailQuery,
+    status: 200,
+    answer: trailPage,
+  }),
+  people: operation({
+    method: 'GET',
+    path: '/api/people',
+    tag: 'administration',
+    summary: 'The team',
+    may: 'team.manage',
+    status: 200,
+    answer: z.array(member),
+  }),
+  addPerson: operation({
+    method: 'POST',
+    path: '/api/people',
+    tag: 'administration',
+    summary: 'Add a person; the answer tells a random password once',
+    may: 'team.manage',
+    body: addPersonBody,
+    status: 201,
+    answer: addedPerson,
+  }),
+  changeRoles: operation({
+    method: 'PUT',
+    path: '/api/people/{id}/roles',
+    tag: 'administration',
+    summary: 'Replace a person’s roles',
+    may: 'team.manage',
+    params: personParams,
+    body: rolesBody,
+    status: 200,
+    answer: member,
+    problems: [409],
+  }),
+  disablePerson: operation({
+    method: 'POST',
+    path: '/api/people/{id}/disable',
+    tag: 'administration',
+    summary: 'Shut a person out; all their sessions end',
+    may: 'team.manage',
+    params: personParams,
+    body: emptyBody,
+    status: 200,
+    answer: member,
+    problems: [409],
+  }),
+  enablePerson: operation({
+    method: 'POST',
+    path: '/api/people/{id}/enable',
+    tag: 'administration',
+    summary: 'Let a person sign in again',
+    may: 'team.manage',
+    params: personParams,
+    body: emptyBody,
+    status: 200,
+    answer: member,
   }),
 } as const;
 

@@ -1,3 +1,4 @@
-export { deliverMail, keepMailGoing, outbox, requeueMailInHand, waitAfter } from './queue';
+export { deliverMail, keepMailGoing, requeueMailInHand, waitAfter } from './queue';
 export { forgetTransport, remembered, sendMail, type Delivery } from './transport';
 export { tellLibrarians, tellOwner } from './letters';
+export { outbox } from './outbox';

@@ -1,4 +1,4 @@
-import { claimMail, dueMail, listMail, mailInHand, markMailFailed, markMailSent, type MailRecord } from '@db';
+import { claimMail, dueMail, mailInHand, markMailFailed, markMailSent, type MailRecord } from '@db';
 import { log } from '../log';
 import { sendMail } from './transport';
 
@@ -47,5 +47,3 @@ let timer: NodeJS.Timeout | undefined;
 export function keepMailGoing(): void {
   timer ??= setInterval(() => void deliverMail(), LOOK_EVERY_MS).unref();
 }
-
-export const outbox = (limit = 200) => listMail(limit);

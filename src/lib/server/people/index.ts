@@ -3,3 +3,4 @@ export { lucia, sessionOf, listSessions, endSession, type LiveSession } from './
 export { hashPassword, verifyPassword } from './passwords';
 export { changePassword } from './account';
 export { requireCan } from './require';
+export { addPerson, changeRoles, disablePerson, enablePerson, makePerson, randomPassword, team } from './team';
