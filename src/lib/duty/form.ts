@@ -30,12 +30,14 @@ export interface Form {
   currentForVoltage(voltageV: number, Tc: Kelvin, Th: Kelvin): number;
   /** Current of the largest ΔT (A) and largest ΔT (K) with the hot face at Th. */
   largestDeltaT(Th: Kelvin): { readonly currentA: number; readonly deltaTK: number };
+  /** ΔT (K) at which this current pumps no heat any more, with the hot face at Th; not positive where it pumps none at all. */
+  deltaTWithoutHeat(I: number, Th: Kelvin): number;
   slopes(I: number, Tc: Kelvin, Th: Kelvin): Slopes;
 }
 
 /** The constant form, exact: heat and voltage are linear in α, R and K (see `constantModule`). */
 function constantForm(constants: ModuleConstants): Form {
-  const { alpha, R } = constants;
+  const { alpha, R, K } = constants;
   return {
     module: constantModule(constants),
     currentForHeat: (heatW, Tc, Th) => currentForHeat(constants, heatW, Tc, Th),
@@ -45,6 +47,8 @@ function constantForm(constants: ModuleConstants): Form {
       const { imaxLargestDeltaT, dTmaxK } = maximaAtHotSide(constants, Th);
       return { currentA: imaxLargestDeltaT, deltaTK: dTmaxK };
     },
+    // α (Th − ΔT) I − I²R/2 = K ΔT
+    deltaTWithoutHeat: (I, Th) => (alpha * Th * I - (I * I * R) / 2) / (alpha * I + K),
     slopes: (I, Tc, Th) => ({
       heatPerA: alpha * Tc - I * R,
       voltPerA: R,

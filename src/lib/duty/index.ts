@@ -8,6 +8,9 @@ export {
   type ColdFaceCondensation,
   type Condensation,
 } from './dew-point';
+export { evenCurrents, familyAtHotSide, type FamilyCurve, type FamilyPoint, type ReadValue } from './family';
+export { DUTY_FIELDS, dutyTexts, parseDuty, type DutyField, type DutyParam, type DutyTexts, type ParsedDuty } from './fields';
+export { missSummary } from './summary';
 export { isMatch, judge, searchDuty } from './search';
 export {
   MISS_KINDS,
