@@ -1,3 +1,4 @@
+import type { SerialSequelize } from '../connection';
 import type { Migration } from '.';
 
 // Hand-written SQL: STRICT tables and CHECKs keep what the models promise even against a wrong query.
@@ -208,12 +209,21 @@ const TABLES = [
 
 const NAMES = TABLES.flatMap((sql) => /CREATE TABLE (\w+)/.exec(sql)?.[1] ?? []);
 
+/** All of it or nothing, even when the power goes in the middle. */
+const run = (connection: SerialSequelize, statements: readonly string[]) =>
+  connection.inTransaction(async () => {
+    for (const sql of statements) await connection.query(sql);
+  });
+
 export const spine: Migration = {
   name: '001-spine',
   async up({ context }) {
-    for (const sql of TABLES) await context.sequelize.query(sql);
+    await run(context.sequelize as SerialSequelize, TABLES);
   },
   async down({ context }) {
-    for (const name of NAMES.reverse()) await context.sequelize.query(`DROP TABLE ${name}`);
+    await run(
+      context.sequelize as SerialSequelize,
+      [...NAMES].reverse().map((name) => `DROP TABLE ${name}`),
+    );
   },
 };

@@ -1,5 +1,4 @@
 import {
-  DataTypes,
   Model,
   type CreationOptional,
   type InferAttributes,
@@ -7,6 +6,7 @@ import {
   type NonAttribute,
   type Sequelize,
 } from 'sequelize';
+import { id, instant, real, required, text, whole } from './columns';
 
 export class Vendor extends Model<InferAttributes<Vendor>, InferCreationAttributes<Vendor>> {
   declare id: CreationOptional<number>;
@@ -95,17 +95,11 @@ export class Page extends Model<InferAttributes<Page>, InferCreationAttributes<P
   declare picture?: NonAttribute<Picture>;
 }
 
-// Functions: Sequelize writes into the objects it is given, so none may be shared.
-const id = () => ({ type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true });
-const text = () => ({ type: DataTypes.TEXT });
-const required = () => ({ type: DataTypes.TEXT, allowNull: false });
-const real = () => ({ type: DataTypes.REAL });
-const whole = () => ({ type: DataTypes.INTEGER });
-const date = () => ({ type: DataTypes.DATE });
-const stamps = () => ({ createdAt: date(), updatedAt: date() });
-
 export function initParts(sequelize: Sequelize) {
-  Vendor.init({ id: id(), name: required(), ...stamps() }, { sequelize, modelName: 'Vendor', tableName: 'vendors' });
+  Vendor.init(
+    { id: id(), name: required(), createdAt: instant('createdAt'), updatedAt: instant('updatedAt') },
+    { sequelize, modelName: 'Vendor', tableName: 'vendors' },
+  );
   Module.init(
     {
       id: id(),
@@ -125,7 +119,8 @@ export function initParts(sequelize: Sequelize) {
       acResistanceOhm: real(),
       acResistanceAtC: real(),
       version: { ...whole(), defaultValue: 1 },
-      ...stamps(),
+      createdAt: instant('createdAt'),
+      updatedAt: instant('updatedAt'),
     },
     { sequelize, modelName: 'Module', tableName: 'modules' },
   );
@@ -157,7 +152,8 @@ export function initParts(sequelize: Sequelize) {
       obtainedOn: text(),
       createdBy: required(),
       version: { ...whole(), defaultValue: 1 },
-      ...stamps(),
+      createdAt: instant('createdAt'),
+      updatedAt: instant('updatedAt'),
     },
     { sequelize, modelName: 'Sheet', tableName: 'sheets' },
   );
@@ -174,12 +170,12 @@ export function initParts(sequelize: Sequelize) {
       height: whole(),
       notes: required(),
       createdBy: required(),
-      createdAt: date(),
+      createdAt: instant('createdAt'),
     },
     { sequelize, modelName: 'Picture', tableName: 'pictures', updatedAt: false },
   );
   Page.init(
-    { id: id(), sheetId: whole(), pictureId: whole(), position: whole(), label: text(), createdAt: date() },
+    { id: id(), sheetId: whole(), pictureId: whole(), position: whole(), label: text(), createdAt: instant('createdAt') },
     { sequelize, modelName: 'Page', tableName: 'pages', updatedAt: false },
   );
   Module.belongsTo(Vendor, { foreignKey: 'vendorId', as: 'vendor' });

@@ -1,5 +1,4 @@
 import {
-  DataTypes,
   Model,
   type CreationOptional,
   type InferAttributes,
@@ -7,6 +6,7 @@ import {
   type NonAttribute,
   type Sequelize,
 } from 'sequelize';
+import { instant, required, text } from './columns';
 import type { Role } from '@/lib/access';
 
 export class User extends Model<InferAttributes<User>, InferCreationAttributes<User>> {
@@ -37,27 +37,27 @@ export class Session extends Model<InferAttributes<Session>, InferCreationAttrib
 export function initPeople(sequelize: Sequelize) {
   User.init(
     {
-      id: { type: DataTypes.TEXT, primaryKey: true },
-      email: { type: DataTypes.TEXT, allowNull: false },
-      name: { type: DataTypes.TEXT, allowNull: false },
-      passwordHash: { type: DataTypes.TEXT, allowNull: false },
-      disabledAt: DataTypes.DATE,
-      createdAt: DataTypes.DATE,
-      updatedAt: DataTypes.DATE,
+      id: { ...text(), primaryKey: true },
+      email: required(),
+      name: required(),
+      passwordHash: required(),
+      disabledAt: instant('disabledAt'),
+      createdAt: instant('createdAt'),
+      updatedAt: instant('updatedAt'),
     },
     { sequelize, modelName: 'User', tableName: 'users' },
   );
   UserRole.init(
-    { userId: { type: DataTypes.TEXT, primaryKey: true }, role: { type: DataTypes.TEXT, primaryKey: true } },
+    { userId: { ...text(), primaryKey: true }, role: { ...text(), primaryKey: true } },
     { sequelize, modelName: 'UserRole', tableName: 'user_roles', timestamps: false },
   );
   Session.init(
     {
-      id: { type: DataTypes.TEXT, primaryKey: true },
-      userId: { type: DataTypes.TEXT, allowNull: false },
-      expiresAt: { type: DataTypes.DATE, allowNull: false },
-      agent: DataTypes.TEXT,
-      createdAt: DataTypes.DATE,
+      id: { ...text(), primaryKey: true },
+      userId: required(),
+      expiresAt: instant('expiresAt'),
+      agent: text(),
+      createdAt: instant('createdAt'),
     },
     { sequelize, modelName: 'Session', tableName: 'sessions', updatedAt: false },
   );

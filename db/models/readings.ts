@@ -1,5 +1,4 @@
 import {
-  DataTypes,
   Model,
   type CreationOptional,
   type InferAttributes,
@@ -7,6 +6,7 @@ import {
   type NonAttribute,
   type Sequelize,
 } from 'sequelize';
+import { id, instant, required, text, whole } from './columns';
 import { Module, Sheet } from './parts';
 import { User } from './people';
 
@@ -70,12 +70,6 @@ export class Decision extends Model<InferAttributes<Decision>, InferCreationAttr
   declare user?: NonAttribute<User>;
 }
 
-// Functions: Sequelize writes into the objects it is given, so none may be shared.
-const id = () => ({ type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true });
-const required = () => ({ type: DataTypes.TEXT, allowNull: false });
-const whole = () => ({ type: DataTypes.INTEGER });
-const date = () => ({ type: DataTypes.DATE });
-
 export function initReadings(sequelize: Sequelize) {
   Reading.init(
     {
@@ -87,13 +81,13 @@ export function initReadings(sequelize: Sequelize) {
       version: { ...whole(), defaultValue: 1 },
       document: required(),
       savedBy: required(),
-      savedAt: date(),
-      createdAt: date(),
+      savedAt: instant('savedAt'),
+      createdAt: instant('createdAt'),
     },
     { sequelize, modelName: 'Reading', tableName: 'readings', updatedAt: false },
   );
   ReadingEditor.init(
-    { readingId: { ...whole(), primaryKey: true }, userId: { type: DataTypes.TEXT, primaryKey: true } },
+    { readingId: { ...whole(), primaryKey: true }, userId: { ...text(), primaryKey: true } },
     { sequelize, modelName: 'ReadingEditor', tableName: 'reading_editors', timestamps: false },
   );
   ReadingPicture.init(
@@ -109,12 +103,20 @@ export function initReadings(sequelize: Sequelize) {
       result: required(),
       engine: required(),
       hash: required(),
-      createdAt: date(),
+      createdAt: instant('createdAt'),
     },
     { sequelize, modelName: 'FittedModel', tableName: 'models', updatedAt: false },
   );
   Decision.init(
-    { id: id(), readingId: whole(), what: required(), reason: DataTypes.TEXT, userId: required(), modelId: whole(), createdAt: date() },
+    {
+      id: id(),
+      readingId: whole(),
+      what: required(),
+      reason: text(),
+      userId: required(),
+      modelId: whole(),
+      createdAt: instant('createdAt'),
+    },
     { sequelize, modelName: 'Decision', tableName: 'decisions', updatedAt: false },
   );
   Reading.belongsTo(Module, { foreignKey: 'moduleId', as: 'module' });

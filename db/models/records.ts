@@ -1,5 +1,4 @@
 import {
-  DataTypes,
   Model,
   type CreationOptional,
   type InferAttributes,
@@ -7,6 +6,7 @@ import {
   type NonAttribute,
   type Sequelize,
 } from 'sequelize';
+import { id, instant, text, whole } from './columns';
 import { User } from './people';
 
 export class TrailEntry extends Model<InferAttributes<TrailEntry>, InferCreationAttributes<TrailEntry>> {
@@ -37,14 +37,9 @@ export class Counter extends Model<InferAttributes<Counter>, InferCreationAttrib
   declare value: number;
 }
 
-// Functions: Sequelize writes into the objects it is given, so none may be shared.
-const id = () => ({ type: DataTypes.INTEGER, primaryKey: true, autoIncrement: true });
-const text = () => ({ type: DataTypes.TEXT });
-const date = () => ({ type: DataTypes.DATE });
-
 export function initRecords(sequelize: Sequelize) {
   TrailEntry.init(
-    { id: id(), userId: text(), action: text(), object: text(), detail: text(), createdAt: date() },
+    { id: id(), userId: text(), action: text(), object: text(), detail: text(), createdAt: instant('createdAt') },
     { sequelize, modelName: 'TrailEntry', tableName: 'trail', updatedAt: false },
   );
   QueuedMail.init(
@@ -54,16 +49,16 @@ export function initRecords(sequelize: Sequelize) {
       subject: text(),
       body: text(),
       state: text(),
-      tries: DataTypes.INTEGER,
-      nextTryAt: date(),
+      tries: whole(),
+      nextTryAt: instant('nextTryAt'),
       lastError: text(),
-      createdAt: date(),
-      sentAt: date(),
+      createdAt: instant('createdAt'),
+      sentAt: instant('sentAt'),
     },
     { sequelize, modelName: 'QueuedMail', tableName: 'mail_queue', updatedAt: false },
   );
   Counter.init(
-    { name: { ...text(), primaryKey: true }, value: DataTypes.INTEGER },
+    { name: { ...text(), primaryKey: true }, value: whole() },
     { sequelize, modelName: 'Counter', tableName: 'counters', timestamps: false },
   );
   TrailEntry.belongsTo(User, { foreignKey: 'userId', as: 'user' });

@@ -50,3 +50,17 @@ export async function clientOf(base: string, who: Who | null): Promise<Client> {
   }
   return made;
 }
+
+/** Somebody whom an administrator has just added, signed in: for tests that change the person. */
+export async function newcomer(base: string, roles: readonly string[]) {
+  const administrator = await clientOf(base, 'administrator');
+  const email = `newcomer-${Math.random().toString(36).slice(2, 10)}@kelda.example`;
+  const added = (await (await administrator.post('/api/people', { email, name: 'New Comer', roles })).json()) as {
+    person: { id: string };
+    password: string;
+  };
+  const { password } = added;
+  const made = client(base);
+  await made.post('/api/session', { email, password });
+  return { ...made, email, password, id: added.person.id };
+}

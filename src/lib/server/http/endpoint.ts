@@ -67,7 +67,7 @@ async function readCall<O extends Operation>(operation: O, context: APIContext):
 
 function parsePart(schema: z.ZodType | undefined, value: unknown, status: 404 | 422): unknown {
   if (!schema) return undefined;
-  const parsed = schema.safeParse(value);
+  const parsed = schema.safeParse(value, { reportInput: true });
   if (parsed.success) return parsed.data;
   if (status === 404) throw new Refusal(404, 'not-found', 'There is nothing at this address.');
   throw wrongInput(fieldSentences(parsed.error));
@@ -75,8 +75,15 @@ function parsePart(schema: z.ZodType | undefined, value: unknown, status: 404 | 
 
 /** One sentence a field: `charts[0].marks[2].px` → what is wrong with it. */
 export function fieldSentences(error: z.ZodError): Record<string, string> {
-  const entries = error.issues.map((issue) => [pathName(issue.path), issue.message] as const);
+  const entries = error.issues.map((issue) => [pathName(issue.path), sentenceOf(issue)] as const);
   return Object.fromEntries(entries.reverse());
+}
+
+/** Our contracts speak in sentences; what the library says by itself is made into one. */
+function sentenceOf(issue: z.core.$ZodIssue): string {
+  if (issue.code === 'unrecognized_keys') return `There is nothing called ${issue.keys.join(', ')} here: leave it out.`;
+  if (issue.code === 'invalid_type' && issue.input === undefined && issue.message.startsWith('Invalid')) return 'This is missing.';
+  return /[.!?]$/.test(issue.message) ? issue.message : `${issue.message}.`;
 }
 
 const pathName = (path: readonly PropertyKey[]) =>

@@ -54,7 +54,6 @@ const makeLucia = () =>
     sessionExpiresIn: new TimeSpan(config().sessionIdleMinutes, 'm'),
     sessionCookie: {
       name: config().secure ? '__Host-couplet' : 'couplet',
-      expires: false,
       attributes: { secure: config().secure, sameSite: 'lax', path: '/' },
     },
     getUserAttributes: (person) => person,
