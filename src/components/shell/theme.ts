@@ -5,5 +5,7 @@ export function setTheme(choice: string): void {
   const set = choice === 'light' || choice === 'dark';
   if (set) document.documentElement.dataset.theme = choice;
   else delete document.documentElement.dataset.theme;
+  for (const radio of document.querySelectorAll<HTMLInputElement>('input[type=radio][name=theme]'))
+    radio.checked = radio.value === (set ? choice : 'system');
   document.cookie = `theme=${set ? choice : ''}; Path=/; SameSite=Lax; Max-Age=${set ? YEAR_SECONDS : 0}`;
 }
