@@ -8,7 +8,16 @@ export default defineConfig({
   test: {
     projects: [
       { resolve, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}', 'tests/checks/**/*.test.ts'], testTimeout: 20_000 } },
-      { resolve, test: { name: 'db', include: ['tests/db/**/*.test.ts'], testTimeout: 20_000, hookTimeout: 30_000 } },
+      {
+        resolve,
+        test: {
+          name: 'db',
+          include: ['tests/db/**/*.test.ts'],
+          setupFiles: ['tests/support/database-settings.ts'],
+          testTimeout: 20_000,
+          hookTimeout: 30_000,
+        },
+      },
       {
         resolve,
         test: {
