@@ -1,4 +1,4 @@
-import { changed, changedById, withoutId } from './change';
+import { changed, changedById, same, withoutId } from './change';
 import type { Command } from './commands';
 import type { BenchChart, BenchCurve, BenchDocument } from './document';
 import { findChart, nextId, roundPx } from './document';
@@ -117,7 +117,7 @@ export const apply = (document: BenchDocument, command: Command): BenchDocument 
     case 'setNote':
       return changed(document, { note: command.note || undefined });
     case 'replace':
-      return changed(document, command.document);
+      return same(document, command.document) ? document : command.document;
     default:
       return withCharts(changedById(document.charts, command.chart, (chart) => applyToChart(chart, command)));
   }

@@ -1,0 +1,46 @@
+import { Button } from '@/components/ui/Button';
+import { ToggleButton } from '@/components/ui/ToggleButton';
+import { Toolbar, ToolbarGap } from '@/components/ui/Toolbar';
+import { ZOOM_STEP, type Tool } from '@/lib/editor';
+import { useSession, useTools } from '../state/tools';
+
+const PLACES = { frame: 'Place marks', curves: 'Place points' } as const;
+
+/** The tools of the station in hand, and the zoom. */
+export function StageToolbar({ onHelp }: { onHelp: () => void }) {
+  const { store, stage, frozen } = useTools();
+  const { station, tool, selection } = useSession();
+  const use = (to: Tool) => () => store.go({ type: 'tool', tool: to });
+  return (
+    <Toolbar label="Tools of the picture" className="bench-tools">
+      {(station === 'frame' || station === 'curves') && !frozen && (
+        <>
+          <ToggleButton size="small" isSelected={tool === 'place'} onChange={use('place')} aria-keyshortcuts="P">
+            {PLACES[station]}
+          </ToggleButton>
+          <ToggleButton size="small" isSelected={tool === 'select'} onChange={use('select')} aria-keyshortcuts="V">
+            Pick and move
+          </ToggleButton>
+          {selection && (
+            <ToggleButton size="small" isSelected={tool === 'target'} onChange={(on) => use(on ? 'target' : 'select')()}>
+              Move it here
+            </ToggleButton>
+          )}
+        </>
+      )}
+      <ToolbarGap />
+      <Button size="small" icon aria-label="Zoom out" onPress={() => stage.zoom(1 / ZOOM_STEP)}>
+        −
+      </Button>
+      <Button size="small" icon aria-label="Zoom in" onPress={() => stage.zoom(ZOOM_STEP)}>
+        +
+      </Button>
+      <Button size="small" onPress={() => stage.fit()}>
+        Fit
+      </Button>
+      <Button size="small" variant="quiet" icon aria-label="Keys" onPress={onHelp}>
+        ?
+      </Button>
+    </Toolbar>
+  );
+}

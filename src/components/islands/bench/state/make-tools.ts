@@ -1,0 +1,38 @@
+import { ask } from '@/components/islands/api';
+import type { ReadingView, SaveAnswer } from '@/lib/contracts';
+import { StageView } from '../stage/stage-view';
+import { createAnnouncer } from './announcer';
+import { Saver, type SaverSeams } from './saver';
+import { createBenchStore } from './store';
+import { pagesOf, type BenchTools } from './tools';
+import { unsavedStore, type UnsavedStore } from './unsaved';
+
+const seams = (readingId: number, unsaved: UnsavedStore): SaverSeams => ({
+  put: async (document, version) =>
+    (await ask<SaveAnswer>(`/api/readings/${readingId}`, { method: 'PUT', body: { document }, ifMatch: `"${version}"` })).data,
+  keep: (document, version) => unsaved.keep({ readingId, version, document, at: new Date().toISOString() }),
+  forget: () => unsaved.forget(readingId),
+  after: (milliseconds, task) => {
+    const timer = setTimeout(task, milliseconds);
+    return () => clearTimeout(timer);
+  },
+});
+
+/** Everything the bench works with, wired together. */
+export function makeTools(reading: ReadingView, personId: string): BenchTools {
+  const frozen = !reading.may.edit;
+  const unsaved = unsavedStore(personId);
+  const store = createBenchStore(reading.document, frozen);
+  const saver = new Saver(reading, seams(reading.id, unsaved));
+  return {
+    reading,
+    personId,
+    frozen,
+    unsaved,
+    store,
+    saver,
+    pages: pagesOf(reading),
+    stage: new StageView(),
+    announcer: createAnnouncer(),
+  };
+}
