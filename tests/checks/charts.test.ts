@@ -46,7 +46,7 @@ const rms = (values: readonly number[]) => Math.sqrt(values.reduce((sum, value) 
 
 describe('d01 and d03 clicked by hand, off by half a pixel', () => {
   it.each([11, 12, 13, 14, 15])(
-    'give a model within 1.5 %% of Qmax of the heat and 5 %% of Vmax of the voltage (seed %i)',
+    'with seed %i give a model within 1.5 per cent of Qmax of the heat and 5 per cent of Vmax of the voltage',
     async (seed) => {
       const { fit } = await readWithFit(clickedDocument(['d01', 'd03'], { count: 8, scatterPx: 0.5, seed }), blankHost);
       const module = constantModule(constantsOf(fit!));

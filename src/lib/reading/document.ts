@@ -10,7 +10,17 @@ const name = z
   .min(1, { error: 'Give some text.' })
   .max(200, { error: 'Keep this below 200 characters.' });
 const px = z.tuple([number, number], { error: 'Give a pixel as two numbers, [x, y].' });
-const note = z.unknown().optional();
+
+/** Notes are hashed with the document, so they may not be deeper than a hash can follow. */
+const DEEPEST_NOTE = 40;
+function isShallow(value: unknown, levels = DEEPEST_NOTE): boolean {
+  if (value === null || typeof value !== 'object') return true;
+  return levels > 0 && Object.values(value).every((inner) => isShallow(inner, levels - 1));
+}
+const note = z
+  .unknown()
+  .refine((value) => isShallow(value), { error: `Keep a note at most ${DEEPEST_NOTE} levels deep.` })
+  .optional();
 const one = <const T extends readonly [string, ...string[]]>(values: T) => z.enum(values, { error: `Use one of: ${values.join(', ')}.` });
 
 const rated = z.strictObject({

@@ -61,6 +61,28 @@ function impossible(state: State): string | null {
   return Object.values(state).every(Number.isFinite) ? null : 'Here the chart has no value: check the marks.';
 }
 
+const BEYOND = 'This point lies beyond the horizon of the perspective: check the marks.';
+
+/** What the points of one chart say, and the impossible ones. */
+function observeChart(document: ReadingDocument, chart: number, frame: Frame, constants: ModuleConstants | null): Observations {
+  const shown = document.charts[chart]!;
+  const values = chartValues(shown, document.module);
+  const answer = values.roles.answer.quantity;
+  const range = rangeOf(shown, frame, values);
+  const observations: Observation[] = [];
+  const problems: Refusal[] = [];
+  for (const [at, curve] of (shown.curves ?? []).entries()) {
+    for (const [point, px] of (curve.points ?? []).entries()) {
+      const state = stateAt(values, frame, curve.value, px);
+      const message = isVisible(frame, px) ? impossible(state) : BEYOND;
+      if (message) problems.push({ path: `charts[${chart}].curves[${at}].points[${point}]`, message });
+      else
+        observations.push({ chart, curve: at, point, ...state, answer, u: uncertaintyAt({ values, frame, curve }, px, constants), range });
+    }
+  }
+  return { observations, problems };
+}
+
 /**
  * What every point of every curve says about the module, in base units, for the fit. `frames` are those of the charts in order.
  * With `constants` the uncertainties take both axes through that model; without, that of the answer's own axis alone.
@@ -71,33 +93,6 @@ export function observationsOf(
   frames: readonly Frame[],
   constants: ModuleConstants | null = null,
 ): Observations {
-  const observations: Observation[] = [];
-  const problems: Refusal[] = [];
-  for (const [chart, shown] of document.charts.entries()) {
-    const frame = frames[chart];
-    if (!frame) continue;
-    const values = chartValues(shown, document.module);
-    const { quantity: answer } = values.roles.answer;
-    const range = rangeOf(shown, frame, values);
-    for (const [at, curve] of (shown.curves ?? []).entries()) {
-      for (const [point, px] of (curve.points ?? []).entries()) {
-        const state = stateAt(values, frame, curve.value, px);
-        const message = isVisible(frame, px)
-          ? impossible(state)
-          : 'This point lies beyond the horizon of the perspective: check the marks.';
-        if (message) problems.push({ path: `charts[${chart}].curves[${at}].points[${point}]`, message });
-        else
-          observations.push({
-            chart,
-            curve: at,
-            point,
-            ...state,
-            answer,
-            u: uncertaintyAt({ values, frame, curve }, px, constants),
-            range,
-          });
-      }
-    }
-  }
-  return { observations, problems };
+  const charts = frames.slice(0, document.charts.length).map((frame, chart) => observeChart(document, chart, frame, constants));
+  return { observations: charts.flatMap((chart) => chart.observations), problems: charts.flatMap((chart) => chart.problems) };
 }
