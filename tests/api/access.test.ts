@@ -53,6 +53,9 @@ const TABLE: Record<OperationName, readonly Who[]> = {
   changeRoles: [A],
   disablePerson: [A],
   enablePerson: [A],
+  catalogue: [E, L, D, A],
+  moduleModel: [E, L, D, A],
+  duty: [E, L, D],
 };
 
 const NOWHERE = '999999';

@@ -1,5 +1,7 @@
 export * from './admin';
+export * from './catalogue';
 export * from './common';
+export * from './duty';
 export * from './parts';
 export * from './people';
 export * from './readings';

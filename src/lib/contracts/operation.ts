@@ -21,6 +21,8 @@ export interface Operation {
   readonly answer?: z.ZodType;
   /** Media type of an answer that is not JSON. */
   readonly media?: string;
+  /** Answers 304 where If-None-Match names what is there. */
+  readonly revalidates?: true;
   /** Problem statuses beyond those that follow from the rest. */
   readonly problems?: readonly number[];
 }

@@ -1,6 +1,8 @@
 import { z } from 'zod';
 import { addedPerson, addPersonBody, mailItem, member, personParams, rolesBody, trailPage, trailQuery } from './admin';
+import { catalogueAnswer, catalogueQuery, moduleModel } from './catalogue';
 import { idParams, rowId } from './common';
+import { dutyAnswer, dutyBody } from './duty';
 import { operation } from './operation';
 import {
   moduleBody,
@@ -241,6 +243,7 @@ export const operations = {
     params: idParams,
     status: 200,
     media: 'image/png',
+    revalidates: true,
   }),
   original: operation({
     method: 'GET',
@@ -466,6 +469,36 @@ export const operations = {
     body: emptyBody,
     status: 200,
     answer: member,
+  }),
+  catalogue: operation({
+    method: 'GET',
+    path: '/api/catalogue',
+    tag: 'catalogue',
+    summary: 'Approved modules: filtered, sorted, a page of them',
+    may: 'catalogue.see',
+    query: catalogueQuery,
+    status: 200,
+    answer: catalogueAnswer,
+  }),
+  moduleModel: operation({
+    method: 'GET',
+    path: '/api/modules/{id}/model',
+    tag: 'catalogue',
+    summary: 'The approved model of a module, with what it stands on',
+    may: 'catalogue.see',
+    params: idParams,
+    status: 200,
+    answer: moduleModel,
+  }),
+  duty: operation({
+    method: 'POST',
+    path: '/api/duty',
+    tag: 'duty',
+    summary: 'Which approved modules pump a wanted heat, and why the others do not',
+    may: 'duty.search',
+    body: dutyBody,
+    status: 200,
+    answer: dutyAnswer,
   }),
 } as const;
 

@@ -78,7 +78,11 @@ function describeOperation(id: string, operation: Operation): Json {
     tags: [operation.tag],
     parameters: parameters(operation),
     ...(body ? { requestBody: body } : {}),
-    responses: { [operation.status]: success(operation), ...Object.fromEntries(problemStatuses(operation).map(refused)) },
+    responses: {
+      [operation.status]: success(operation),
+      ...(operation.revalidates ? { 304: { description: 'Not Modified' } } : {}),
+      ...Object.fromEntries(problemStatuses(operation).map(refused)),
+    },
     ...(operation.may === 'open' ? { security: [] } : {}),
   };
 }
