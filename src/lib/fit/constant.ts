@@ -4,6 +4,7 @@ import { checkObservations } from './check';
 import { gapOf, tooLittle } from './missing';
 import { modelOf, problemOf, tripleOf, type Triple } from './problem';
 import { remainderOf } from './residuals';
+import { sharedCovariance } from './shared';
 import { startConstants } from './start';
 import { constantsOf, type FitOutcome, type Observation } from './types';
 import { MISFIT_FLOOR } from './weights';
@@ -30,7 +31,7 @@ const UNSETTLED = `The fit did not settle on one answer: ${CHECK}`;
  *
  * Weights are 1/(u² + (floor · axis range)²), those of one curve together at most those of fifteen points. The covariance is
  * that of the weights, (XᵀWX)⁻¹, or the sandwich by curve of K.-Y. Liang and S. L. Zeger (see `solveLeastSquares`), in every
- * direction the larger of both: points of one curve share their line and their marks and are not independent.
+ * direction the larger of both: points of one curve share their line and are not independent. Errors shared by a chart (marks) come on top.
  *
  * Where rank, condition or covariance say that the charts do not determine all three, where they contradict each other or the
  * iteration does not settle, the outcome is one sentence and no number. Throws a RangeError for what is no observation:
@@ -49,7 +50,12 @@ export function fitConstant(observations: readonly Observation[], { misfitFloor 
   if (first.status !== 'solved') return refuse(tooLittle(used, relativeTo(tripleOf(start), first.weakest)), first);
   const solution = gaussNewton({ ...problem, start: tripleOf(start) });
   const refusal = refusalOf(solution, used);
-  return refusal ?? { ok: true, fit: { ...describe(solution), ...remainderOf(constantsAt(solution), observations, misfitFloor) } };
+  return (
+    refusal ?? {
+      ok: true,
+      fit: { ...describe(solution, used, problem.weights), ...remainderOf(constantsAt(solution), observations, misfitFloor) },
+    }
+  );
 }
 
 const constantsAt = ({ parameters }: NonlinearFit) => constantsOf({ parameters: parameters as Triple });
@@ -76,12 +82,16 @@ function refusalOf({ status, parameters, linear }: NonlinearFit, used: readonly 
   return impossible.length === 0 ? null : refuse(`Together these charts give no positive ${impossible.join(' and ')}: ${CHECK}`, linear);
 }
 
-function describe({ parameters, linear, iterations, status, why }: NonlinearFit) {
-  const { covariance, clusterCovariance, rank, condition } = linear as SolvedFit;
+function describe(solution: NonlinearFit, used: readonly Observation[], weights: Vector) {
+  const { parameters, linear, iterations, status, why } = solution;
+  const { covariance: information, clusterCovariance, rank, condition } = linear as SolvedFit;
+  const own = clusterCovariance ? largerCovariance(information, clusterCovariance) : information;
+  const { jacobian } = modelOf(constantsAt(solution), used)!;
+  const shared = sharedCovariance(used, { jacobian, weights, information });
   return {
     form: 'constant' as const,
     parameters: parameters as Triple,
-    covariance: clusterCovariance ? largerCovariance(covariance, clusterCovariance) : covariance,
+    covariance: own.map((row, i) => row.map((value, j) => value + shared[i]![j]!)),
     rank,
     condition,
     iterations,

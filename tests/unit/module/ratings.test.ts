@@ -16,7 +16,7 @@ describe('constantsFromRatings', () => {
       fc.property(anyConstants, anyFace, (c, hot) => {
         const m = maximaAtHotSide(c, hot);
         const four = { qmaxW: m.qmaxW, vmaxV: m.vmaxV, imaxA: m.imaxLargestDeltaT, dTmaxK: m.dTmaxK };
-        const outcome = constantsFromRatings({ ...four, [left]: undefined } as ThreeRatings, hot);
+        const outcome = constantsFromRatings({ ...four, [left]: undefined } as unknown as ThreeRatings, hot);
         if (!outcome.ok) throw new Error(outcome.message);
         // Without dTmax, it is the small difference of two large products: a few digits go.
         const tolerance = left === 'dTmaxK' ? 1e-7 : 1e-10;
