@@ -1,0 +1,1 @@
+export { dutySearch, readDutyAddress } from './search';
