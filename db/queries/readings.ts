@@ -212,6 +212,17 @@ export async function createModel(model: {
   return (await FittedModel.create(model)).id;
 }
 
+/** Models by number, from the one after `id` on. */
+export async function modelsAfter(id: number, limit: number): Promise<ModelRecord[]> {
+  return (await FittedModel.findAll({ where: { id: { [Op.gt]: id } }, order: ['id'], limit })).map(toModel);
+}
+
+/** The model that the last approval of a reading named; null when it was never approved. */
+export async function approvedModelId(readingId: number): Promise<number | null> {
+  const row = await Decision.findOne({ where: { readingId, what: 'approved' }, order: [['id', 'DESC']] });
+  return row?.modelId ?? null;
+}
+
 /** The newest model of a reading. */
 export async function latestModel(readingId: number): Promise<ModelRecord | null> {
   const row = await FittedModel.findOne({ where: { readingId }, order: [['id', 'DESC']] });

@@ -155,6 +155,11 @@ export async function findPictures(ids: readonly number[]): Promise<PictureRecor
   return (await Picture.findAll({ where: { id: { [Op.in]: [...ids] } } })).map(toPicture);
 }
 
+/** Pictures by number, from the one after `id` on. */
+export async function picturesAfter(id: number, limit: number): Promise<PictureRecord[]> {
+  return (await Picture.findAll({ where: { id: { [Op.gt]: id } }, order: ['id'], limit })).map(toPicture);
+}
+
 export async function findPictureByFile(fileSha256: string): Promise<PictureRecord | null> {
   const row = await Picture.findOne({ where: { fileSha256 } });
   return row && toPicture(row);

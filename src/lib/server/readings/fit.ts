@@ -44,11 +44,18 @@ export interface FittedDraft {
   readonly pixelsSha256: readonly string[];
 }
 
-/** Reads and fits the finished charts of a draft, as the command would; saves nothing. */
-export async function fitDraft(reading: ReadingRecord, draft: BenchDocument): Promise<FittedDraft> {
+/**
+ * Reads and fits the finished charts of a draft, as the command would; saves nothing. What was handed in is fitted
+ * again with the module as it was then: give it.
+ */
+export async function fitDraft(
+  reading: ReadingRecord,
+  draft: BenchDocument,
+  module: ReadingModule = toReadingModule(reading.module),
+): Promise<FittedDraft> {
   const pictures = await findPictures([...new Set(draft.charts.map((chart) => chart.pictureId))]);
   const nameOf = imageNames(pictures);
-  const conversion = toReadingDocument(draft, toReadingModule(reading.module), nameOf);
+  const conversion = toReadingDocument(draft, module, nameOf);
   const { document } = conversion;
   if (!document) return { conversion, document, read: null, pixelsSha256: [] };
   const byName = new Map(pictures.map((picture) => [nameOf(picture.id), picture]));

@@ -22,6 +22,7 @@ import { deliverMail, tellLibrarians, tellOwner } from '../mail';
 import type { SignedInPerson } from '../people';
 import { fitDraft, readingTo, readingView } from '../readings';
 import { conflict, lostRace, wrongInput } from '../refusal';
+import { hashOfStored } from './model-hash';
 
 const WORDS: Readonly<Record<ReadingState, string>> = {
   draft: 'a draft',
@@ -139,10 +140,7 @@ async function supersede(actor: SignedInPerson, moduleId: number): Promise<void>
 async function intactModel(id: number) {
   const model = await latestModel(id);
   if (!model) throw conflict('There is no model to approve.');
-  const { charts, model: fitted } = JSON.parse(model.result) as { charts: { pixelsSha256: string }[]; model: never };
-  const pixels = charts.map((chart) => chart.pixelsSha256);
-  const hash = canonicalHash(hashMaterial(JSON.parse(model.document) as never, pixels, fitted, model.engine));
-  if (hash !== model.hash)
+  if (hashOfStored(model) !== model.hash)
     throw conflict('What was handed in has changed since, so it cannot be approved. Return it, and have it handed in again.', 'hash');
   return model;
 }
