@@ -6,16 +6,17 @@ import { Sequelize, Transaction, type TransactionOptions } from 'sequelize';
  * Sequelize opens one more SQLite connection for every transaction and gives no hook for it,
  * so per-connection settings are made where the connection is made.
  */
-class Database extends sqlite3.Database {
-  constructor(file: string, mode: number, done: (error: Error | null) => void) {
-    super(file, mode, (error) => {
-      if (error) return done(error);
-      this.serialize(); // one statement, so one libuv thread, per connection
-      this.configure('busyTimeout', 5000);
-      this.exec('PRAGMA foreign_keys = ON; PRAGMA synchronous = FULL;', done);
-    });
-  }
-}
+const databaseWith = (synchronous: 'FULL' | 'OFF') =>
+  class Database extends sqlite3.Database {
+    constructor(file: string, mode: number, done: (error: Error | null) => void) {
+      super(file, mode, (error) => {
+        if (error) return done(error);
+        this.serialize(); // one statement, so one libuv thread, per connection
+        this.configure('busyTimeout', 5000);
+        this.exec(`PRAGMA foreign_keys = ON; PRAGMA synchronous = ${synchronous};`, done);
+      });
+    }
+  };
 
 /**
  * Sequelize finds the transaction of the running request here, so that no query can be left out of it
@@ -60,12 +61,15 @@ export class SerialSequelize extends Sequelize {
   }
 }
 
-/** Opens a database file (never `:memory:`, whose one connection hides transaction errors). */
-export const openConnection = (storage: string): SerialSequelize =>
+/**
+ * Opens a database file (never `:memory:`, whose one connection hides transaction errors). `OFF` is for a file that
+ * is thrown away if anything goes wrong while it is made.
+ */
+export const openConnection = (storage: string, synchronous: 'FULL' | 'OFF' = 'FULL'): SerialSequelize =>
   new SerialSequelize({
     dialect: 'sqlite',
     storage,
-    dialectModule: { ...sqlite3, Database },
+    dialectModule: { ...sqlite3, Database: databaseWith(synchronous) },
     logging: false,
     transactionType: Transaction.TYPES.IMMEDIATE, // the write lock at BEGIN: a later upgrade could only fail
     retry: { max: 0 }, // the default retries SQLITE_BUSY five times on top of the busy timeout

@@ -5,10 +5,10 @@ import { initModels } from './models';
 
 const held = globalThis as unknown as { coupletDatabase?: SerialSequelize };
 
-/** Opens the one database of this process. Opening another file first closes the last. */
-export async function openDatabase(file: string): Promise<void> {
+/** Opens the one database of this process. Opening another file first closes the last. `OFF` is for a file still in the making. */
+export async function openDatabase(file: string, synchronous: 'FULL' | 'OFF' = 'FULL'): Promise<void> {
   await closeDatabase();
-  held.coupletDatabase = openConnection(file);
+  held.coupletDatabase = openConnection(file, synchronous);
   initModels(held.coupletDatabase);
 }
 

@@ -1,9 +1,10 @@
-import { mkdirSync } from 'node:fs';
+import { closeSync, fsyncSync, mkdirSync, openSync, renameSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { closeDatabase, countPeople, migrate, openDatabase, selfCheck, useRollbackJournal } from '@db';
 import { config } from './config';
-import { requeueMailInHand } from './mail';
 import { DEMO_PASSWORD, DEMO_PEOPLE, seedPeople } from './demo/people';
+import { seedSamples } from './demo/seed';
+import { deliverMail, requeueMailInHand } from './mail';
 
 /** What a start has to tell. */
 export interface BootReport {
@@ -27,20 +28,50 @@ const FIRST_ADMINISTRATOR = [
   '  npm run person -- --email you@example.org --name "Your Name" --roles administrator',
 ];
 
+/** Opens a database file, brings it up to date and looks at it; answers what was migrated. */
+async function openWhole(file: string): Promise<string[]> {
+  await openDatabase(file);
+  await useRollbackJournal();
+  const migrated = await migrate();
+  await selfCheck();
+  return migrated;
+}
+
+function syncFile(file: string): void {
+  const handle = openSync(file, 'r');
+  fsyncSync(handle);
+  closeSync(handle);
+}
+
+/** Seeds the demo beside the empty database and puts it in its place at the end, so that it is never there in part. */
+async function replaceByDemo(file: string, what: 'whole' | 'people'): Promise<void> {
+  await closeDatabase();
+  const draft = `${file}.new`;
+  for (const old of [draft, `${draft}-journal`]) rmSync(old, { force: true });
+  await openDatabase(draft, 'OFF');
+  await migrate();
+  await seedPeople();
+  if (what === 'whole') {
+    console.log('Bringing in the demo’s sheets and readings…');
+    await seedSamples(path.resolve('samples'));
+    await deliverMail();
+  }
+  await closeDatabase();
+  syncFile(draft);
+  renameSync(draft, file);
+  syncFile(path.dirname(file));
+  await openWhole(file);
+}
+
 /** Before the port opens: settings, folders, migrations, the database's self-check, and demo data where it belongs. */
 export async function boot(): Promise<BootReport> {
   const settings = config();
   for (const folder of [path.dirname(settings.databaseFile), settings.uploadsFolder]) mkdirSync(folder, { recursive: true });
-  await openDatabase(settings.databaseFile);
   try {
-    await useRollbackJournal();
-    const migrated = await migrate();
-    await selfCheck();
+    const migrated = await openWhole(settings.databaseFile);
     await requeueMailInHand();
     const empty = (await countPeople()) === 0;
-    if (empty && settings.demo) {
-      await seedPeople();
-    }
+    if (empty && settings.demo) await replaceByDemo(settings.databaseFile, settings.demoData);
     return {
       address: settings.publicAddress.origin,
       host: settings.host,

@@ -16,6 +16,7 @@ const environment = z.object({
   COUPLET_HOST: z.string().min(1, 'must be an address to listen on').default('127.0.0.1'),
   COUPLET_PUBLIC_ADDRESS: z.url({ protocol: /^https?$/, error: 'must be an address like https://couplet.example.org' }).optional(),
   COUPLET_DEMO: onOff.default(true),
+  COUPLET_DEMO_DATA: z.enum(['whole', 'people'], 'must be whole or people').default('whole'),
   COUPLET_DATA: z.string().min(1).optional(),
   COUPLET_TRUST_PROXY: onOff.default(false),
   COUPLET_MAX_UPLOAD_MB: whole(1, 200).default(30),
@@ -36,6 +37,8 @@ export interface Config {
   readonly publicAddress: URL;
   readonly secure: boolean;
   readonly demo: boolean;
+  /** In an empty demo database: people and samples, or people only. */
+  readonly demoData: 'whole' | 'people';
   readonly trustProxy: boolean;
   readonly maxUploadBytes: number;
   readonly sessionIdleMinutes: number;
@@ -68,6 +71,7 @@ export function readConfig(variables: NodeJS.ProcessEnv): Config {
     publicAddress,
     secure: publicAddress.protocol === 'https:',
     demo: env.COUPLET_DEMO,
+    demoData: env.COUPLET_DEMO_DATA,
     trustProxy: env.COUPLET_TRUST_PROXY,
     maxUploadBytes: env.COUPLET_MAX_UPLOAD_MB * 1024 * 1024,
     sessionIdleMinutes: env.COUPLET_SESSION_IDLE_MINUTES,

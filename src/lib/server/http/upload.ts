@@ -2,6 +2,7 @@ import type { IncomingMessage, ServerResponse } from 'node:http';
 import { Readable } from 'node:stream';
 import type { ReadableStream as WebStream } from 'node:stream/web';
 import multer from 'multer';
+import { fileTooLarge } from '@/lib/contracts';
 import { Refusal } from '../refusal';
 
 export interface UploadedFile {
@@ -14,12 +15,7 @@ type MulterRequest = IncomingMessage & { file?: Express.Multer.File };
 const ENVELOPE_BYTES = 64 * 1024;
 const LONGEST_NAME = 200;
 
-const tooLarge = (limit: number) =>
-  new Refusal(
-    413,
-    'too-large',
-    `The file is larger than ${Math.floor(limit / 1024 / 1024)} MB. Save the page on its own, or at a lower resolution.`,
-  );
+const tooLarge = (limit: number) => new Refusal(413, 'too-large', fileTooLarge(limit));
 
 /** Reads one file, in the field `file`, from a multipart request through multer; refuses in sentences. */
 export async function readUpload(request: Request, maxBytes: number): Promise<UploadedFile> {
