@@ -43,26 +43,27 @@ function atCurrent({ alpha, R, K }: ModuleConstants, answer: Answer, { Tc, Th }:
     gradient,
     byCurrent,
   });
-  const heat = linear([Tc * I, (-I * I) / 2, -deltaT], alpha * Tc - I * R);
-  const power = linear([deltaT * I, I * I, 0], alpha * deltaT + 2 * I * R);
+  const heat = () => linear([Tc * I, (-I * I) / 2, -deltaT], alpha * Tc - I * R);
+  const power = () => linear([deltaT * I, I * I, 0], alpha * deltaT + 2 * I * R);
   switch (answer) {
     case 'Qc':
-      return heat;
+      return heat();
     case 'Qh':
       return linear([Th * I, (I * I) / 2, -deltaT], alpha * Th + I * R);
     case 'P':
-      return power;
+      return power();
     case 'V':
       return linear([deltaT, I, 0], R);
     case 'I':
       return { value: I, gradient: [0, 0, 0], byCurrent: 1 };
     case 'COP':
-      return power.value > 0 ? ratio(heat, power) : null;
+      return ratio(heat(), power());
   }
 }
 
-/** Quotient rule over every derivative. */
-function ratio(over: AtCurrent, under: AtCurrent): AtCurrent {
+/** Quotient rule over every derivative; null over nothing or less. */
+function ratio(over: AtCurrent, under: AtCurrent): AtCurrent | null {
+  if (!(under.value > 0)) return null;
   const value = over.value / under.value;
   const by = (top: number, bottom: number) => (top - value * bottom) / under.value;
   const [a, b] = [over.gradient, under.gradient];
