@@ -1,6 +1,5 @@
 // Before `astro dev`, which has no boot step of its own: migrate and seed.
-import { existsSync } from 'node:fs';
+import './env';
 import { boot } from '@/lib/server/boot';
 
-if (existsSync('.env')) process.loadEnvFile('.env');
 for (const line of (await boot()).lines) console.log(line);
