@@ -6,12 +6,20 @@ export interface FieldProblem {
   readonly message: string;
 }
 
+export interface ErrorSummaryProps {
+  problems: readonly FieldProblem[];
+  title?: string;
+  /** Counts the tries, so that focus comes here again when a second try fails in the same way. */
+  attempt?: number;
+}
+
 /** All that is wrong with a form, above it: focus goes here, each line leads to its field, in the words beside the field. */
-export function ErrorSummary({ problems, title = 'There is a problem' }: { problems: readonly FieldProblem[]; title?: string }) {
+export function ErrorSummary({ problems, title = 'There is a problem', attempt = 0 }: ErrorSummaryProps) {
   const box = useRef<HTMLDivElement>(null);
+  const text = problems.map(({ message }) => message).join('\n');
   useEffect(() => {
-    if (problems.length > 0) box.current?.focus();
-  }, [problems]);
+    if (text !== '') box.current?.focus();
+  }, [text, attempt]);
   if (problems.length === 0) return null;
   return (
     <div ref={box} tabIndex={-1} role="alert" className="notice notice-attention mb-4">

@@ -40,7 +40,7 @@ export function Select<Id extends string>(props: SelectProps<Id>) {
     >
       <FieldLabel label={label} hideLabel={hideLabel} />
       <Button className="select">
-        <SelectValue className="truncate" />
+        <SelectValue className="truncate">{({ selectedText, defaultChildren }) => selectedText || defaultChildren}</SelectValue>
         <span aria-hidden="true">▾</span>
       </Button>
       <FieldNotes description={description} error={error} />
