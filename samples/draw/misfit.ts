@@ -14,6 +14,8 @@ export interface Misfit {
   readonly pointsVoltage: number | null;
   readonly truthHeat: number;
   readonly truthVoltage: number;
+  /** Ratings that follow from the model over the true ones, at the first hot side. */
+  readonly ratings: { readonly imax: number; readonly qmax: number; readonly dTmax: number; readonly vmax: number };
 }
 
 const rms = (values: readonly number[]) => Math.sqrt(values.reduce((sum, value) => sum + value * value, 0) / values.length);
@@ -56,8 +58,17 @@ export async function misfitOf(sheet: DrawnSheet, reading: DrawnReading): Promis
   const constants = { alpha: model.alpha.value, R: model.R.value, K: model.K.value };
   const sides = [...new Set(reading.document.charts.map(({ hotSideC }) => hotSideC ?? 27))];
   const gaps = sides.flatMap((side) => gapsAt(side, reading.made, constants));
+  const implied = model.derived.find(({ hotSideC }) => hotSideC === sides[0]);
+  const real = reading.made.truth.ratings(sides[0] ?? 27);
+  const over = (value: number | undefined, truth: number) => (value ?? NaN) / truth;
   return {
     reading,
+    ratings: {
+      imax: over(implied?.imaxLargestDeltaT.value, real.imaxLargestDeltaT),
+      qmax: over(implied?.qmaxW.value, real.qmaxLargestDeltaT),
+      dTmax: over(implied?.dTmaxK.value, real.dTmaxK),
+      vmax: over(implied?.vmaxV.value, real.vmaxV),
+    },
     points: reading.document.charts.flatMap(({ curves = [] }) => curves.flatMap(({ points = [] }) => points)).length,
     pointsHeat: model.rmsPercentOfQmax,
     pointsVoltage: model.rmsPercentOfVmax,
@@ -76,15 +87,19 @@ export function misfitTable(misfits: readonly Misfit[]): string {
     const numbers = [misfit.pointsHeat, misfit.pointsVoltage, misfit.truthHeat, misfit.truthVoltage].map(percent);
     return `| ${[made.body.vendor, name, sides, document.charts.length, points, ...numbers].join(' | ')} |`;
   };
+  const ordered = (values: readonly number[]) => [...values].sort((a, b) => a - b);
+  const middle = (values: readonly number[]) => ordered(values)[Math.floor(values.length / 2)] ?? NaN;
   const spread = (key: 'truthHeat' | 'truthVoltage') => {
-    const sorted = misfits.map((misfit) => misfit[key]).sort((a, b) => a - b);
-    return `${percent(sorted[Math.floor(sorted.length / 2)] ?? null)} % in the middle, ${percent(sorted.at(-1) ?? null)} % at worst`;
+    const values = misfits.map((misfit) => misfit[key]);
+    return `${percent(middle(values))} % in the middle, ${percent(Math.max(...values))} % at worst`;
   };
+  const implied = (key: keyof Misfit['ratings']) => percent(middle(misfits.map(({ ratings }) => ratings[key])));
   return [
     '| vendor | module | hot sides | charts | points | heat, of points | voltage, of points | heat, of truth | voltage, of truth |',
     '| --- | --- | --- | ---: | ---: | ---: | ---: | ---: | ---: |',
     ...misfits.map(row),
     '',
     `Against the truth, heat: ${spread('truthHeat')}. Voltage: ${spread('truthVoltage')}.`,
+    `Ratings that follow from the three constants over the true ones, in the middle: Imax ${implied('imax')}, Qmax ${implied('qmax')}, ΔTmax ${implied('dTmax')}, Vmax ${implied('vmax')}.`,
   ].join('\n');
 }
