@@ -4,11 +4,13 @@ import { formatNumber, formatWithUnit, NO_BREAK_SPACE, unitSymbol } from '@/lib/
 
 const KILO = 1024;
 
+const tenths = (value: number) => Math.round(10 * value) / 10;
+
 /** A file's size: "312 kB", "1.4 MB". */
 export function printBytes(bytes: number): string {
   if (bytes < KILO) return formatWithUnit(bytes, 'bytes');
   if (bytes < KILO * KILO) return formatWithUnit(Math.round(bytes / KILO), 'kB');
-  return formatWithUnit(bytes / KILO / KILO, 'MB', { decimals: 1 });
+  return formatWithUnit(tenths(bytes / KILO / KILO), 'MB');
 }
 
 /** How much of a file has gone: "1.2 of 3.4 MB". */

@@ -5,5 +5,6 @@ export * from './duty';
 export * from './parts';
 export * from './people';
 export * from './readings';
+export * from './sentences';
 export { type Operation } from './operation';
 export { operations, type OperationName } from './operations';

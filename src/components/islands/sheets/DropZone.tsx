@@ -1,7 +1,8 @@
-import { useEffect, useRef, useState, useSyncExternalStore, type DragEvent, type ReactNode } from 'react';
+import { useEffect, useRef, useState, type DragEvent, type ReactNode } from 'react';
 import { Button } from '@/components/ui/Button';
 import { classes } from '@/components/ui/classes';
 import { carriesFiles, droppedFiles, mayBeDropped, namePasted, pastedFiles } from './picked-files';
+import { useAwake } from './use-page';
 
 interface Props {
   /** Labels in use, so that pasted pictures get others. */
@@ -122,11 +123,10 @@ const NOTHING_TO_PASTE = 'There is no picture on the clipboard. Copy one first.'
 const MAY_NOT_PASTE = 'This browser does not let the page see the clipboard. Press Ctrl and V instead.';
 
 const canReadClipboard = () => 'clipboard' in navigator && 'read' in navigator.clipboard;
-const never = () => () => undefined;
 
 /** The same for a hand without a keyboard; absent where the browser has no way to ask for the clipboard. */
 function PasteButton({ labels, onFiles }: Pick<Props, 'labels' | 'onFiles'>) {
-  const shown = useSyncExternalStore(never, canReadClipboard, () => false);
+  const shown = useAwake() && canReadClipboard();
   const paste = async () => {
     try {
       const pictures = await readClipboard();

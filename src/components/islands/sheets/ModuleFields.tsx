@@ -48,7 +48,7 @@ export function ModuleFields({ form }: { form: Form<ModuleDraft> }) {
   );
   return (
     <>
-      <div className="grid gap-4 sm:grid-cols-2 lg:grid-cols-4">
+      <div className="grid grid-cols-2 gap-4 lg:grid-cols-4">
         {text('partNumber', 'Part number', 'As printed.', true)}
         {text('variant', 'Variant', 'Sealing, leads or height grade, where they make another part.')}
         {numbers(BODY)}
@@ -84,7 +84,7 @@ interface PlateProps {
 
 function Plate({ form, name, label, value: [width, depth], onChange }: PlateProps) {
   return (
-    <div role="group" aria-label={label} className="grid grid-cols-2 content-start gap-2">
+    <div role="group" aria-label={label} className="col-span-2 grid grid-cols-2 content-start gap-2 sm:col-span-1">
       <NumberField
         form={form}
         name={`${name}[0]`}

@@ -5,7 +5,7 @@ import type { ModuleBody, ModuleView } from '@/lib/contracts';
 import { differences } from './differences';
 import { FormFrame } from './FormFrame';
 import { LostRace } from './LostRace';
-import { checkModule, draftOfModule, moduleLines, type ModuleDraft } from './module-draft';
+import { checkModule, draftOfModule, emptyModule, likeModule, moduleLines, type ModuleDraft } from './module-draft';
 import { ModuleFields } from './ModuleFields';
 import { RatingFields } from './RatingFields';
 import { useForm, type Form } from './use-form';
@@ -18,7 +18,9 @@ const Fields = ({ form }: { form: Form<ModuleDraft> }) => (
 );
 
 interface AddProps {
-  draft: ModuleDraft;
+  vendor: string;
+  /** A module to begin from: all that is stated of it but its name. */
+  like: ModuleView | null;
   /** The module that was added, and whether its reading is to be started at once. */
   onAdded: (module: ModuleView, start: boolean) => void;
   onCancel: () => void;
@@ -26,10 +28,11 @@ interface AddProps {
 }
 
 /** A new module of the sheet's vendor. */
-export function AddModule({ draft, onAdded, onCancel, mayStart }: AddProps) {
+export function AddModule({ vendor, like, onAdded, onCancel, mayStart }: AddProps) {
+  const [initial] = useState(() => (like ? likeModule(like) : emptyModule(vendor)));
   const start = useRef(mayStart);
   const form = useForm({
-    initial: draft,
+    initial,
     prefix: 'module.',
     check: checkModule,
     send: (body) => api.post<ModuleView>('/api/modules', body),
@@ -42,7 +45,7 @@ export function AddModule({ draft, onAdded, onCancel, mayStart }: AddProps) {
   return (
     <FormFrame
       form={{ ...form, submit: (event) => submit(mayStart, event) }}
-      label={`Add a module of ${draft.vendor}`}
+      label={`Add a module of ${vendor}`}
       action={mayStart ? 'Add and start a reading' : 'Add the module'}
       onCancel={onCancel}
       more={mayStart && <Button onPress={() => submit(false)}>Add only</Button>}

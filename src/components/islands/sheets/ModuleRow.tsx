@@ -3,6 +3,7 @@ import { moduleFacts, partName, ratingText } from '@/components/sheets/words';
 import { Button } from '@/components/ui/Button';
 import { Chip } from '@/components/ui/Chip';
 import type { VendorModule } from '@/lib/contracts';
+import { editButton } from './use-modules';
 
 interface Props {
   module: VendorModule;
@@ -59,7 +60,7 @@ export function ModuleRow({ module, draft, may, onStart, onEdit, onAddLike, chil
             </Button>
           )}
           {may.edit && !children && (
-            <Button size="small" variant="quiet" id={`edit-${module.id}`} aria-label={`Edit ${name}`} onPress={onEdit}>
+            <Button size="small" variant="quiet" id={editButton(module.id)} aria-label={`Edit ${name}`} onPress={onEdit}>
               Edit
             </Button>
           )}

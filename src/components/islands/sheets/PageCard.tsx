@@ -20,7 +20,7 @@ export function PageCard({ sheetId, page, number, mayRemove, onRemoved, focusAft
   const { picture } = page;
   return (
     <li className="flex flex-col gap-1">
-      <a href={picture.url} draggable={false} className="grid h-44 place-items-center border border-line bg-paper p-1">
+      <a href={picture.url} draggable={false} className="block h-44 border border-line bg-paper p-1">
         <img
           src={picture.url}
           alt={`Page ${number}, ${page.label}: whole picture`}
@@ -29,7 +29,7 @@ export function PageCard({ sheetId, page, number, mayRemove, onRemoved, focusAft
           loading="lazy"
           decoding="async"
           draggable={false}
-          className="max-h-full w-auto max-w-full object-contain"
+          className="h-full w-full object-contain"
         />
       </a>
       <p className="break-words">

@@ -92,7 +92,7 @@ function HotSide({ form, rating, at, onChange, onRemove }: HotSideProps) {
           Remove
         </Button>
       )}
-      <div className="clear-both grid gap-3 pt-1 sm:grid-cols-2 lg:grid-cols-5">{NUMBERS.map((spec) => number(...spec))}</div>
+      <div className="clear-both grid grid-cols-2 gap-3 pt-1 lg:grid-cols-5">{NUMBERS.map((spec) => number(...spec))}</div>
       <div className="grid gap-3 pt-3 sm:grid-cols-2 lg:grid-cols-4">
         <MeaningSelect<Rating['imaxMeans']>
           label="Imax means"

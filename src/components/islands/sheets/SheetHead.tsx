@@ -1,18 +1,14 @@
-import { useState } from 'react';
-import { ask } from '@/components/islands/api';
+import { lazy, Suspense, useState } from 'react';
 import { printDate } from '@/components/sheets/dates';
 import { sheetTitle } from '@/components/sheets/words';
 import { Button } from '@/components/ui/Button';
 import { ErrorBoundary } from '@/components/ui/ErrorBoundary';
 import { Status } from '@/components/ui/Toast';
-import type { SheetBody, SheetView } from '@/lib/contracts';
-import { differences } from './differences';
-import { FormFrame } from './FormFrame';
-import { LostRace } from './LostRace';
-import { checkSheet, draftOfSheet, sheetLines } from './sheet-draft';
-import { SheetFields } from './SheetFields';
-import { useForm } from './use-form';
+import type { SheetView } from '@/lib/contracts';
+import { FormLoading } from './FormLoading';
 import { focusSoon } from './use-page';
+
+const SheetEditor = lazy(async () => ({ default: (await import('./SheetEditor')).SheetEditor }));
 
 interface Props {
   sheet: SheetView;
@@ -21,9 +17,6 @@ interface Props {
 }
 
 const EDIT_BUTTON = 'sheet-edit';
-
-const putSheet = async (sheet: SheetView, body: SheetBody) =>
-  (await ask<SheetView>(`/api/sheets/${sheet.id}`, { method: 'PUT', body, ifMatch: `"${sheet.version}"` })).data;
 
 function Head({ sheet: first, vendors, mayEdit }: Props) {
   const [sheet, setSheet] = useState(first);
@@ -53,56 +46,13 @@ function Head({ sheet: first, vendors, mayEdit }: Props) {
       </div>
       {editing ? (
         <div className="sheet mt-3 p-4">
-          <SheetEditor sheet={sheet} vendors={vendors} onClose={close} />
+          <Suspense fallback={<FormLoading />}>
+            <SheetEditor sheet={sheet} vendors={vendors} onClose={close} />
+          </Suspense>
         </div>
       ) : (
         <Identity sheet={sheet} />
       )}
-    </>
-  );
-}
-
-function SheetEditor({
-  sheet,
-  vendors,
-  onClose,
-}: {
-  sheet: SheetView;
-  vendors: readonly string[];
-  onClose: (after: SheetView, words: string) => void;
-}) {
-  const [base, setBase] = useState(sheet);
-  const [race, setRace] = useState<SheetBody | null>(null);
-  const [initial] = useState(() => draftOfSheet(sheet));
-  const lost = (current: unknown, mine: SheetBody) => {
-    const theirs = current as SheetView;
-    // the same words twice: an answer that went astray, or two people of one mind
-    if (differences(sheetLines(mine), sheetLines(theirs)).length === 0) return onClose(theirs, 'Saved.');
-    setBase(theirs);
-    setRace(mine);
-  };
-  const form = useForm({
-    initial,
-    prefix: 'sheet.',
-    check: checkSheet,
-    send: (body) => putSheet(base, body),
-    onSent: (saved) => onClose(saved, 'Saved.'),
-    onLostRace: lost,
-  });
-  return (
-    <>
-      {race && (
-        <LostRace
-          what="sheet"
-          lines={differences(sheetLines(race), sheetLines(base))}
-          onKeepMine={() => form.submit()}
-          onTakeTheirs={() => onClose(base, 'Theirs was taken.')}
-          busy={form.busy}
-        />
-      )}
-      <FormFrame form={form} label="What this sheet is" action="Save" onCancel={() => onClose(base, '')}>
-        <SheetFields form={form} vendors={vendors} />
-      </FormFrame>
     </>
   );
 }

@@ -1,16 +1,17 @@
-import { useState } from 'react';
-import { api, ApiProblem } from '@/components/islands/api';
+import { lazy, Suspense, useState } from 'react';
+import { partName } from '@/components/sheets/words';
 import { Button } from '@/components/ui/Button';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { ErrorBoundary } from '@/components/ui/ErrorBoundary';
 import { TextField } from '@/components/ui/TextField';
 import { Status } from '@/components/ui/Toast';
-import { partName } from '@/components/sheets/words';
 import type { ModuleView, VendorModule } from '@/lib/contracts';
-import { emptyModule, likeModule, type ModuleDraft } from './module-draft';
-import { AddModule, EditModule } from './ModuleForm';
+import { FormLoading } from './FormLoading';
 import { ModuleRow } from './ModuleRow';
-import { focusSoon } from './use-page';
+import { ADD_BUTTON, useModules } from './use-modules';
+
+const AddModule = lazy(async () => ({ default: (await import('./ModuleForm')).AddModule }));
+const EditModule = lazy(async () => ({ default: (await import('./ModuleForm')).EditModule }));
 
 interface Props {
   sheetId: number;
@@ -22,123 +23,105 @@ interface Props {
   mayStart: boolean;
 }
 
-type Open =
-  { readonly form: 'add'; readonly draft: ModuleDraft; readonly key: number } | { readonly form: 'edit'; readonly id: number } | null;
+type Desk = ReturnType<typeof useModules>;
 
-const ADD_BUTTON = 'add-module';
-const FILTER_FROM = 9;
+/** From so many modules on there is a field to find one by. */
+const FIND_FROM = 9;
 
 const byName = (a: ModuleView, b: ModuleView) => partName(a).localeCompare(partName(b), 'en', { numeric: true });
-const matches = (module: ModuleView, words: string) => partName(module).toLowerCase().includes(words.trim().toLowerCase());
+const has = (module: ModuleView, words: string) => partName(module).toLowerCase().includes(words.trim().toLowerCase());
 
-/** Asks for a reading and goes to its bench; answers a sentence when it could not be started. */
-async function startReading(sheetId: number, moduleId: number): Promise<string> {
-  try {
-    const { id } = await api.post<{ id: number }>(`/api/sheets/${sheetId}/readings`, { moduleId });
-    location.assign(`/bench/${id}`);
-    return '';
-  } catch (error) {
-    if (error instanceof ApiProblem) return error.detail;
-    throw error;
-  }
-}
-
-function Modules({ sheetId, vendor, modules: first, drafts, mayAdd, mayStart }: Props) {
-  const [modules, setModules] = useState(first);
-  const [open, setOpen] = useState<Open>(null);
-  const [words, setWords] = useState('');
-  const [said, setSaid] = useState('');
-  const [refusal, setRefusal] = useState('');
-  const shown = modules.filter((module) => matches(module, words)).toSorted(byName);
-
-  const openAdd = (draft: ModuleDraft) => setOpen((now) => ({ form: 'add', draft, key: now?.form === 'add' ? now.key + 1 : 1 }));
-  const close = (focus: string, sentence = '') => {
-    setOpen(null);
-    setSaid(sentence);
-    focusSoon(focus);
-  };
-  const start = async (moduleId: number) => setRefusal(await startReading(sheetId, moduleId));
-  const added = async (module: ModuleView, andStart: boolean) => {
-    setModules((now) => [...now, { ...module, approved: false, mayEdit: true }]);
-    close(ADD_BUTTON, `${partName(module)} is added.`);
-    if (andStart) await start(module.id);
-  };
-  const edited = (after: ModuleView, sentence: string) => {
-    setModules((now) => now.map((module) => (module.id === after.id ? { ...module, ...after } : module)));
-    close(`edit-${after.id}`, sentence);
-  };
-
+function Modules(props: Props) {
+  const desk = useModules(props.sheetId, props.modules);
   return (
     <section aria-labelledby="modules">
       <div className="mb-2 flex flex-wrap items-baseline gap-x-3">
-        <h2 id="modules">Modules of {vendor}</h2>
-        <Status>{said}</Status>
+        <h2 id="modules" className="leading-6">
+          Modules of {props.vendor}
+        </h2>
+        <Status>{desk.said}</Status>
       </div>
       <div className="sheet p-4">
-        <p role="alert" className={refusal ? 'error mb-3' : 'sr-only'}>
-          {refusal}
+        <p role="alert" className={desk.refusal ? 'error mb-3' : 'sr-only'}>
+          {desk.refusal}
         </p>
-        {open?.form === 'add' ? (
-          <div className="mb-4 border-b border-line pb-4">
-            <h3 className="mb-3">A module as this sheet prints it</h3>
-            <AddModule
-              key={open.key}
-              draft={open.draft}
-              onAdded={(...args) => void added(...args)}
-              onCancel={() => close(ADD_BUTTON)}
-              mayStart={mayStart}
-            />
-          </div>
-        ) : (
-          mayAdd &&
-          modules.length > 0 && (
-            <Button id={ADD_BUTTON} onPress={() => openAdd(emptyModule(vendor))}>
-              Add a module
-            </Button>
-          )
-        )}
-        {modules.length === 0 && open === null && (
-          <EmptyState
-            title={`No module of ${vendor} yet`}
-            action={
-              mayAdd && (
-                <Button id={ADD_BUTTON} onPress={() => openAdd(emptyModule(vendor))}>
-                  Add a module
-                </Button>
-              )
-            }
-          >
-            Add the module whose curves this sheet shows, with its ratings as printed; then start its reading.
-          </EmptyState>
-        )}
-        {modules.length >= FILTER_FROM && (
-          <TextField
-            label={`Find among ${modules.length} modules`}
-            value={words}
-            onChange={setWords}
-            className="mt-3 max-w-80"
-            autoComplete="off"
-            spellCheck="false"
-          />
-        )}
-        <ul className="flex flex-col">
-          {shown.map((module) => (
-            <ModuleRow
-              key={module.id}
-              module={module}
-              draft={drafts[module.id]}
-              may={{ edit: module.mayEdit, start: mayStart, add: mayAdd }}
-              onStart={() => start(module.id)}
-              onEdit={() => setOpen({ form: 'edit', id: module.id })}
-              onAddLike={() => openAdd(likeModule(module))}
-            >
-              {open?.form === 'edit' && open.id === module.id && <EditModule module={module} onClose={edited} />}
-            </ModuleRow>
-          ))}
-        </ul>
-        {modules.length > 0 && shown.length === 0 && <p className="muted mt-3">No module here has “{words.trim()}” in its name.</p>}
+        {desk.open?.is === 'add' ? <Adding desk={desk} {...props} /> : props.mayAdd && <AddButton desk={desk} vendor={props.vendor} />}
+        {desk.modules.length > 0 && <ModuleList desk={desk} {...props} />}
       </div>
     </section>
+  );
+}
+
+function Adding({ desk, vendor, mayStart }: Props & { desk: Desk }) {
+  if (desk.open?.is !== 'add') return null;
+  return (
+    <div className={desk.modules.length > 0 ? 'mb-4 border-b border-line pb-4' : ''}>
+      <h3 className="mb-3">A module as this sheet prints it</h3>
+      <Suspense fallback={<FormLoading />}>
+        <AddModule
+          key={desk.open.key}
+          vendor={vendor}
+          like={desk.open.like}
+          onAdded={desk.added}
+          onCancel={desk.cancelAdd}
+          mayStart={mayStart}
+        />
+      </Suspense>
+    </div>
+  );
+}
+
+function AddButton({ desk, vendor }: { desk: Desk; vendor: string }) {
+  const button = (
+    <Button id={ADD_BUTTON} onPress={() => desk.openAdd()}>
+      Add a module
+    </Button>
+  );
+  if (desk.modules.length > 0) return button;
+  return (
+    <EmptyState title={`No module of ${vendor} yet`} action={button}>
+      Add the module whose curves this sheet shows, with its ratings as printed; then start its reading.
+    </EmptyState>
+  );
+}
+
+function ModuleList({ desk, drafts, mayAdd, mayStart }: Props & { desk: Desk }) {
+  const [words, setWords] = useState('');
+  const { modules, open } = desk;
+  const shown = modules.filter((module) => has(module, words)).toSorted(byName);
+  return (
+    <>
+      {modules.length >= FIND_FROM && (
+        <TextField
+          label={`Find among ${modules.length} modules`}
+          value={words}
+          onChange={setWords}
+          className="mt-3 max-w-80"
+          autoComplete="off"
+          spellCheck="false"
+        />
+      )}
+      <ul className="flex flex-col">
+        {shown.map((module) => (
+          <ModuleRow
+            key={module.id}
+            module={module}
+            draft={drafts[module.id]}
+            may={{ edit: module.mayEdit, start: mayStart, add: mayAdd }}
+            onStart={() => desk.start(module.id)}
+            onEdit={() => desk.openEdit(module.id)}
+            onAddLike={() => desk.openAdd(module)}
+          >
+            {open?.is === 'edit' && open.id === module.id && (
+              <Suspense fallback={<FormLoading />}>
+                <EditModule module={module} onClose={desk.edited} />
+              </Suspense>
+            )}
+          </ModuleRow>
+        ))}
+      </ul>
+      {shown.length === 0 && <p className="muted mt-3">No module here has “{words.trim()}” in its name.</p>}
+    </>
   );
 }
 

@@ -1,3 +1,4 @@
+import { printBytes } from '@/components/sheets/words';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { ErrorBoundary } from '@/components/ui/ErrorBoundary';
 import { Status } from '@/components/ui/Toast';
@@ -12,16 +13,16 @@ import { useUploads } from './use-uploads';
 interface Props {
   sheetId: number;
   pages: readonly PageView[];
-  /** The largest file the server takes, as people say it. */
-  largest: string;
+  /** The largest file the server takes. */
+  mostBytes: number;
   mayUpload: boolean;
   mayEdit: boolean;
 }
 
 const HEADING = 'pages';
 
-function Pages({ sheetId, pages: first, largest, mayUpload, mayEdit }: Props) {
-  const uploads = useUploads(sheetId, first);
+function Pages({ sheetId, pages: first, mostBytes, mayUpload, mayEdit }: Props) {
+  const uploads = useUploads(sheetId, first, mostBytes);
   const { pages, said } = uploads.state;
   useLeaveGuard(uploads.state.uploads.some((upload) => !isSettled(upload)));
   const gallery = (
@@ -42,13 +43,13 @@ function Pages({ sheetId, pages: first, largest, mayUpload, mayEdit }: Props) {
   return (
     <section aria-labelledby={HEADING}>
       <div className="mb-2 flex flex-wrap items-baseline gap-x-3">
-        <h2 id={HEADING} tabIndex={-1}>
+        <h2 id={HEADING} tabIndex={-1} className="leading-6">
           Pages
         </h2>
         <Status>{said}</Status>
       </div>
       {mayUpload ? (
-        <DropZone labels={pages.map((page) => page.label)} largest={largest} empty={pages.length === 0} onFiles={uploads.add}>
+        <DropZone labels={pages.map((page) => page.label)} largest={printBytes(mostBytes)} empty={pages.length === 0} onFiles={uploads.add}>
           <UploadList uploads={uploads} />
           {pages.length > 0 && gallery}
         </DropZone>

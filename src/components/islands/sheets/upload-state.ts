@@ -1,5 +1,6 @@
-import type { PageView, UploadAnswer } from '@/lib/contracts';
 import { count } from '@/components/sheets/words';
+import type { PageView, UploadAnswer } from '@/lib/contracts';
+import { fileTooLarge } from '@/lib/contracts/sentences';
 
 export type Progress =
   | { readonly is: 'waiting' }
@@ -22,6 +23,8 @@ export interface UploadState {
   readonly uploads: readonly Upload[];
   readonly said: string;
   readonly nextKey: number;
+  /** The largest file the server takes. */
+  readonly mostBytes: number;
 }
 
 export type UploadEvent =
@@ -39,7 +42,13 @@ export type UploadEvent =
   | { readonly type: 'pages'; readonly pages: readonly PageView[] }
   | { readonly type: 'removed'; readonly pageId: number };
 
-export const startUploads = (pages: readonly PageView[]): UploadState => ({ pages, uploads: [], said: '', nextKey: 1 });
+export const startUploads = ({ pages, mostBytes }: Pick<UploadState, 'pages' | 'mostBytes'>): UploadState => ({
+  pages,
+  uploads: [],
+  said: '',
+  nextKey: 1,
+  mostBytes,
+});
 
 const SETTLED = new Set<Progress['is']>(['done', 'refused', 'cancelled']);
 /** Refusals that may be over in a moment or after signing in: no answer, not signed in, too many at once, a fault of the server. */
@@ -92,9 +101,18 @@ function picked(
   files: readonly { readonly name: string; readonly size: number }[],
   sentences: readonly string[],
 ): UploadState {
-  const waiting = files.map(({ name, size }, at): Upload => ({ key: state.nextKey + at, name, bytes: size, progress: { is: 'waiting' } }));
-  const said = [files.length > 0 && `${count(files.length, 'picture')} to send.`, ...sentences].filter(Boolean).join(' ');
-  return { ...state, uploads: [...state.uploads, ...waiting], nextKey: state.nextKey + files.length, said };
+  const { nextKey, mostBytes } = state;
+  const tooLarge: Progress = { is: 'refused', sentence: fileTooLarge(mostBytes), worthRetrying: false, signedOut: false };
+  const added = files.map(({ name, size }, at): Upload => ({
+    key: nextKey + at,
+    name,
+    bytes: size,
+    progress: size > mostBytes ? tooLarge : { is: 'waiting' },
+  }));
+  const waiting = added.filter((upload) => !isSettled(upload)).length;
+  const refused = added.filter(isSettled).map(({ name }) => `${name} was not taken. ${fileTooLarge(mostBytes)}`);
+  const said = [waiting > 0 && `${count(waiting, 'picture')} to send.`, ...refused, ...sentences].filter(Boolean).join(' ');
+  return { ...state, uploads: [...state.uploads, ...added], nextKey: nextKey + files.length, said };
 }
 
 function progressed(

@@ -1,4 +1,4 @@
-import { useEffect, type RefObject } from 'react';
+import { useEffect, useSyncExternalStore, type RefObject } from 'react';
 
 const ERROR = 'Error: ';
 
@@ -29,3 +29,13 @@ export function useLeaveGuard(unfinished: boolean, done?: RefObject<boolean>): v
 export const focusSoon = (id: string): void => {
   requestAnimationFrame(() => document.getElementById(id)?.focus());
 };
+
+const never = () => () => undefined;
+
+/** False as drawn on the server, true once the page listens. */
+export const useAwake = (): boolean =>
+  useSyncExternalStore(
+    never,
+    () => true,
+    () => false,
+  );

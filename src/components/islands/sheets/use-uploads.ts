@@ -16,8 +16,8 @@ export interface Uploads {
 const AFTER_CANCEL_MS = 600;
 
 /** Sends files to a sheet one after the other. */
-export function useUploads(sheetId: number, pages: readonly PageView[]): Uploads {
-  const [state, dispatch] = useReducer(uploadStep, pages, startUploads);
+export function useUploads(sheetId: number, pages: readonly PageView[], mostBytes: number): Uploads {
+  const [state, dispatch] = useReducer(uploadStep, { pages, mostBytes }, startUploads);
   const files = useRef(new Map<number, File>());
   const running = useRef<{ readonly key: number; readonly stop: AbortController } | null>(null);
 
