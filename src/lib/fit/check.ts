@@ -8,7 +8,7 @@ export function checkObservations(observations: readonly Observation[]): void {
   }
 }
 
-function complaintAbout({ Tc, Th, I, V, answer, value, u, range, shared }: Observation): string | null {
+function complaintAbout({ Tc, Th, I, V, answer, value, u, range }: Observation): string | null {
   if (!(Tc > 0 && Th > 0 && Number.isFinite(Tc + Th))) return 'face temperatures must be above 0 K';
   if ((I === undefined) === (V === undefined)) return 'either the current or the voltage must be given';
   if (!Number.isFinite(I ?? V)) return 'the current or voltage must be finite';
@@ -16,6 +16,5 @@ function complaintAbout({ Tc, Th, I, V, answer, value, u, range, shared }: Obser
   if (answer === 'I' && V === undefined) return 'a current answers to a voltage';
   if (!Number.isFinite(value)) return 'the value must be finite';
   if (!(u >= 0 && Number.isFinite(u))) return 'the uncertainty must be finite and not negative';
-  if (shared && !shared.every(Number.isFinite)) return 'shared errors must be finite';
   return range > 0 && Number.isFinite(range) ? null : 'the range of the axis must be positive';
 }

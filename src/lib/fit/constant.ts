@@ -4,7 +4,6 @@ import { checkObservations } from './check';
 import { gapOf, tooLittle } from './missing';
 import { modelOf, problemOf, tripleOf, type Triple } from './problem';
 import { remainderOf } from './residuals';
-import { sharedCovariance } from './shared';
 import { startConstants } from './start';
 import { constantsOf, type FitOutcome, type Observation } from './types';
 import { MISFIT_FLOOR } from './weights';
@@ -31,7 +30,8 @@ const UNSETTLED = `The fit did not settle on one answer: ${CHECK}`;
  *
  * Weights are 1/(u² + (floor · axis range)²), those of one curve together at most those of fifteen points. The covariance is
  * that of the weights, (XᵀWX)⁻¹, or the sandwich by curve of K.-Y. Liang and S. L. Zeger (see `solveLeastSquares`), in every
- * direction the larger of both: points of one curve share their line and are not independent. Errors shared by a chart (marks) come on top.
+ * direction the larger of both: points of one curve share their line and are not independent.
+ * Errors that all points of a chart share (its marks) show in no residual; whoever knows the frames adds them.
  *
  * Where rank, condition or covariance say that the charts do not determine all three, where they contradict each other or the
  * iteration does not settle, the outcome is one sentence and no number. Throws a RangeError for what is no observation:
@@ -53,7 +53,7 @@ export function fitConstant(observations: readonly Observation[], { misfitFloor 
   return (
     refusal ?? {
       ok: true,
-      fit: { ...describe(solution, used, problem.weights), ...remainderOf(constantsAt(solution), observations, misfitFloor) },
+      fit: { ...describe(solution), ...remainderOf(constantsAt(solution), observations, misfitFloor) },
     }
   );
 }
@@ -82,16 +82,12 @@ function refusalOf({ status, parameters, linear }: NonlinearFit, used: readonly 
   return impossible.length === 0 ? null : refuse(`Together these charts give no positive ${impossible.join(' and ')}: ${CHECK}`, linear);
 }
 
-function describe(solution: NonlinearFit, used: readonly Observation[], weights: Vector) {
-  const { parameters, linear, iterations, status, why } = solution;
-  const { covariance: information, clusterCovariance, rank, condition } = linear as SolvedFit;
-  const own = clusterCovariance ? largerCovariance(information, clusterCovariance) : information;
-  const { jacobian } = modelOf(constantsAt(solution), used)!;
-  const shared = sharedCovariance(used, { jacobian, weights, information });
+function describe({ parameters, linear, iterations, status, why }: NonlinearFit) {
+  const { covariance, clusterCovariance, rank, condition } = linear as SolvedFit;
   return {
     form: 'constant' as const,
     parameters: parameters as Triple,
-    covariance: own.map((row, i) => row.map((value, j) => value + shared[i]![j]!)),
+    covariance: clusterCovariance ? largerCovariance(covariance, clusterCovariance) : covariance,
     rank,
     condition,
     iterations,

@@ -20,11 +20,6 @@ export interface Observation {
   readonly u: number;
   /** Range of the answer's axis, positive. */
   readonly range: number;
-  /**
-   * Errors of the value that all points of the chart have in common, such as those of its marks: one entry for each independent error
-   * at one standard uncertainty, in base units; the same place in the list is the same error at every point of the chart.
-   */
-  readonly shared?: readonly number[] | undefined;
   /** Set aside by a person: not fitted, not counted, but its residual is still told. */
   readonly omitted?: boolean | undefined;
 }
@@ -61,7 +56,7 @@ export interface ConstantFit {
   readonly form: 'constant';
   /** α in V/K, R in ohm, K in W/K. */
   readonly parameters: readonly [alpha: number, R: number, K: number];
-  /** Covariance of the parameters, in their order: by curve or by information, whichever is larger, and errors shared by a chart on top. */
+  /** Covariance of the parameters, in their order: by curve or by information, whichever is larger. Errors shared by a chart (its marks) are not in it. */
   readonly covariance: readonly (readonly number[])[];
   readonly rank: number;
   readonly condition: number;

@@ -161,7 +161,6 @@ describe('fitConstant', () => {
     ['chart 0, curve 0, point 2: a current answers to a voltage', { answer: 'I' }],
     ['chart 0, curve 0, point 2: the value must be finite', { value: Infinity }],
     ['chart 0, curve 0, point 2: the uncertainty must be finite and not negative', { u: -1 }],
-    ['chart 0, curve 0, point 2: shared errors must be finite', { shared: [0.1, NaN] }],
     ['chart 0, curve 0, point 2: the range of the axis must be positive', { range: 0 }],
   ])('takes no observation that is none: %s', (message, fault) => {
     const points = draw(EXAMPLE, { answer: 'Qc', drives: [1, 2, 3] });
@@ -209,25 +208,6 @@ describe('the covariance of a fit', () => {
       return { ...point, value: point.value + point.range * (offset * curve + 0.001 * normal()) };
     });
     expect(found).toBeGreaterThan(0.9);
-  });
-
-  it('holds the truth when the marks of each chart are off, once told so, and not when not told', () => {
-    const scaled = (told: boolean) =>
-      covered(12, (point, normal, error) => {
-        const shared = [0.02 * point.value, 0.01 * point.range];
-        const off = shared[0]! * error(`scale ${point.chart}`) + shared[1]! * error(`origin ${point.chart}`);
-        return { ...point, value: point.value + off + 0.001 * point.range * normal(), ...(told && { shared }) };
-      });
-    expect(scaled(true)).toBeGreaterThan(0.9);
-    expect(scaled(false)).toBeLessThan(0.7);
-  });
-
-  it('takes an error of the scale of a heat chart for the same relative error of every constant', () => {
-    // Heat is linear in α, R and K together: a scale 2 % too large makes each 2 % too large.
-    const heat = draw(EXAMPLE, { answer: 'Qc', drives: [1, 2, 3, 4] });
-    const relative = (points: readonly Observation[]) => fitted(points).covariance.map((row, i) => row[i]! / truth[i]! ** 2);
-    const [plain, shared] = [relative(heat), relative(heat.map((point) => ({ ...point, shared: [0.02 * point.value] })))];
-    shared.forEach((variance, i) => expect(variance - plain[i]!).toBeCloseTo(0.02 ** 2, 8));
   });
 
   it('grows in proportion once the errors of whole curves exceed what every point is granted', () => {
