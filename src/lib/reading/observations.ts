@@ -51,14 +51,21 @@ function rangeOf(chart: ReadingChart, frame: Frame, { roles, conversions }: Char
   const shown = place === 'family' ? curves.map(({ value }) => value) : onAxis(place);
   const base = shown.map(conversions[place].toBase);
   const [least, most] = base.reduce(([low, high], value) => [Math.min(low, value), Math.max(high, value)], [Infinity, -Infinity]);
-  return most > least ? most - least : Math.abs(most) || 1;
+  return Math.max(LEAST_RANGE, most > least ? most - least : Math.abs(most) || 1);
 }
+
+/** In A, V, W, K or 1: far beyond any module, and near enough that its square can be worked with. */
+const LARGEST_BASE_VALUE = 1e9;
+const LEAST_RANGE = 1e-9;
 
 function impossible(state: State): string | null {
   if (!(state.Tc > 0 && state.Th > 0)) {
     return 'Here one side of the module would be colder than absolute zero: check the marks, the units and which side is held.';
   }
-  return Object.values(state).every(Number.isFinite) ? null : 'Here the chart has no value: check the marks.';
+  const isSmall = (value: number) => Math.abs(value) < LARGEST_BASE_VALUE;
+  return Object.values(state).every(isSmall)
+    ? null
+    : 'Here the chart reads a value that no module has: check the marks, the units and the scales.';
 }
 
 const BEYOND = 'This point lies beyond the horizon of the perspective: check the marks.';

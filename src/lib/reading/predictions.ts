@@ -1,4 +1,4 @@
-import { predict, type ConstantFit, type PredictionPoint } from '@/lib/fit';
+import { predict, type ConstantFit, type PredictedValue, type PredictionPoint } from '@/lib/fit';
 import { celsius, kelvin, toCelsius, toKelvin } from '@/lib/units';
 import type { ReadingPrediction } from './document';
 import type { ReadingModel, ReadPrediction, Validity } from './result';
@@ -24,12 +24,15 @@ function askedOf({ hotSideC, coldSideC, deltaT, I, V }: ReadingPrediction) {
   return { ...(hotSideC === undefined ? { coldSideC } : { hotSideC }), deltaT, ...(I === undefined ? { V } : { I }) };
 }
 
+/** Next to no current the COP runs away beyond any number; then there is none. */
+const orNone = (cop: PredictedValue | null) => (cop && Number.isFinite(cop.value) && Number.isFinite(cop.uRead) ? cop : null);
+
 /** One prediction from a fitted model: of I and V the one asked stays a number, the other is an answer. */
 export function predictionOf(asked: ReadingPrediction, fit: ConstantFit, model: ReadingModel): ReadPrediction {
   const point = pointOf(asked);
   const { I, V, Qc, Qh, P, COP } = tidyAll(predict(fit, point, { tolerancePercent: model.tolerancePercent }));
   const electrical = asked.I === undefined ? { I, V: asked.V ?? NaN } : { I: asked.I, V };
-  return { ...askedOf(asked), inside: isInside(model.validity, I.value, point), Qc, Qh, ...electrical, P, COP };
+  return { ...askedOf(asked), inside: isInside(model.validity, I.value, point), Qc, Qh, ...electrical, P, COP: orNone(COP) };
 }
 
 /** The same without a model. */

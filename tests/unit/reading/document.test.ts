@@ -154,6 +154,7 @@ describe('a fault is refused at its place with a sentence', () => {
       /two numbers/,
     ],
     ['a pixel of text', 'charts[0].marks[0].px[1]', chartWith({ marks: [{ px: [1, '2'], x: 1 }] }), /Give a number/],
+    ['a number beyond any chart', 'charts[0].marks[0].x', chartWith({ marks: [{ px: [1, 2], x: 2e9 }] }), /No chart reads so far/],
     ['a curve without value', 'charts[0].curves[0].value', chartWith({ curves: [{ points: [[1, 2]] }] }), /Give a number/],
     ['a curve without points', 'charts[0].curves[0].points', chartWith({ curves: [{ value: 1, points: [] }] }), /at least one point/],
     ['a curve of nothing', 'charts[0].curves[0]', chartWith({ curves: [{ value: 1 }] }), /needs "points", or a pixel to "start" from/],
