@@ -61,7 +61,7 @@ export const view = (document: BenchDocument, session: Session): Scene => {
           omitted,
         }))
       : [],
-    selected: placeOfSelection(chart, session.selection),
+    selected: shows('frame', 'curves', 'model') ? placeOfSelection(chart, session.selection) : null,
   };
 };
 

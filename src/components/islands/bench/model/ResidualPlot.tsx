@@ -46,23 +46,20 @@ const rms = (residuals: readonly Residual[]): number => {
   return Math.sqrt(used.reduce((sum, { percentOfRange }) => sum + percentOfRange ** 2, 0) / Math.max(1, used.length));
 };
 
+export interface ResidualTableProps {
+  readonly groups: readonly CurveResiduals[];
+  readonly charts: readonly BenchChart[];
+  readonly onPick: (residual: Residual) => void;
+}
+
 /** Residuals of every curve of the charts: root mean square in percent of the axis, and how they run along the curve. */
-export function ResidualTable({
-  groups,
-  charts,
-  onPick,
-}: {
-  groups: readonly CurveResiduals[];
-  charts: readonly BenchChart[];
-  onPick: (residual: Residual) => void;
-}) {
-  const { store } = useTools();
+export function ResidualTable({ groups, charts, onPick }: ResidualTableProps) {
   const limit = Math.max(0.5, ...groups.flatMap(({ residuals }) => residuals.map(({ percentOfRange }) => Math.abs(percentOfRange))));
+  const reach = formatNumber(limit, { digits: 2 });
   return (
     <table className="table bench-residuals">
       <caption>
-        Read minus model, in percent of the axis; the strips reach from −{formatNumber(limit, { digits: 2 })} to{' '}
-        {formatNumber(limit, { digits: 2 })}&nbsp;%.
+        Read minus model, in percent of the axis; the strips reach from −{reach} to {reach}&nbsp;%.
       </caption>
       <thead>
         <tr>
@@ -73,33 +70,46 @@ export function ResidualTable({
           <th scope="col">Along the curve</th>
         </tr>
       </thead>
-      <tbody>
-        {groups.map((group) => {
-          const chart = charts[group.chart];
-          const curve = chart?.curves[group.curve];
-          if (!chart || !curve) return null;
-          return (
-            <tr key={`${group.chart}/${group.curve}`}>
-              <td>
-                <button
-                  type="button"
-                  className="bench-link"
-                  onClick={() => store.go({ type: 'chart', chart: chart.id })}
-                  aria-label={`Show ${curveName(chart, curve)} of ${chartName(chart)}`}
-                >
-                  <Swatch style={group.curve} /> {curveName(chart, curve)}
-                </button>
-                <br />
-                <small>{chartName(chart)}</small>
+      {charts.map((chart, at) => {
+        const own = groups.filter((group) => group.chart === at);
+        return own.length > 0 && <ChartResiduals key={chart.id} chart={chart} groups={own} limit={limit} onPick={onPick} />;
+      })}
+    </table>
+  );
+}
+
+interface ChartResidualsProps extends Pick<ResidualTableProps, 'groups' | 'onPick'> {
+  readonly chart: BenchChart;
+  readonly limit: number;
+}
+
+function ChartResiduals({ chart, groups, limit, onPick }: ChartResidualsProps) {
+  const { store } = useTools();
+  return (
+    <tbody>
+      <tr>
+        <th scope="rowgroup" colSpan={3}>
+          <button type="button" className="bench-link" onClick={() => store.go({ type: 'chart', chart: chart.id })}>
+            {chartName(chart)}
+          </button>
+        </th>
+      </tr>
+      {groups.map((group) => {
+        const curve = chart.curves[group.curve];
+        return (
+          curve && (
+            <tr key={group.curve}>
+              <td className="whitespace-nowrap">
+                <Swatch style={group.curve} /> {curveName(chart, curve)}
               </td>
               <td className="num">{formatNumber(rms(group.residuals), { decimals: 2 })}</td>
               <td>
                 <Strip chart={chart} of={group} limit={limit} onPick={onPick} />
               </td>
             </tr>
-          );
-        })}
-      </tbody>
-    </table>
+          )
+        );
+      })}
+    </tbody>
   );
 }

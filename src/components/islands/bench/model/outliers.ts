@@ -2,7 +2,7 @@ import type { ModelAnswer, Residual } from '@/lib/contracts';
 import { curveName, type BenchDocument } from '@/lib/editor';
 import { formatNumber } from '@/lib/units';
 
-/** A point whose residual is far from those of the rest of its curve. */
+/** A point whose residual stands out from those of its neighbours along the curve. */
 export interface Outlier {
   readonly residual: Residual;
   readonly text: string;
@@ -36,20 +36,41 @@ const median = (values: readonly number[]): number => {
 /** Scale of a normal distribution from its median absolute deviation. */
 const NORMAL = 1.4826;
 /** Robust standard deviations beyond which a point is worth a look. */
-const FAR = 4;
+const FAR = 5;
 /** Percent of the axis below which no point is called far, however even the rest is. */
-const NEAR_PERCENT = 0.25;
+const NEAR_PERCENT = 0.3;
+/** Curves with fewer points have no run that a point could be off. */
+const FEWEST = 5;
 
-/** Points far from the run of their curve: more than four robust standard deviations from its median, and a quarter percent of the axis. Farthest first. */
+/** How far each residual is off the line through its two neighbours; at an end, off the line through the next two. */
+const offNeighbours = (list: readonly Residual[]): readonly number[] => {
+  const at = (index: number) => list[index] ?? { px: [0, 0] as const, percentOfRange: 0 };
+  const line = (a: ReturnType<typeof at>, b: ReturnType<typeof at>, x: number) => {
+    const run = b.px[0] - a.px[0];
+    return Math.abs(run) < 1e-6
+      ? (a.percentOfRange + b.percentOfRange) / 2
+      : a.percentOfRange + ((b.percentOfRange - a.percentOfRange) * (x - a.px[0])) / run;
+  };
+  return list.map(({ px, percentOfRange }, index) => {
+    const [a, b] = index === 0 ? [1, 2] : index === list.length - 1 ? [index - 1, index - 2] : [index - 1, index + 1];
+    return percentOfRange - line(at(a), at(b), px[0]);
+  });
+};
+
+/** A form that does not fit bends residuals evenly along a curve; a slip of the hand stands out from its neighbours. */
+const farOf = ({ residuals }: CurveResiduals): readonly Residual[] => {
+  const used = residuals.filter(({ omitted }) => !omitted);
+  if (used.length < FEWEST) return [];
+  const off = offNeighbours(used).map(Math.abs);
+  const limit = Math.max(FAR * NORMAL * median(off), NEAR_PERCENT);
+  const peak = (index: number) => Math.max(off[index - 1] ?? 0, off[index + 1] ?? 0) <= (off[index] ?? 0);
+  return used.filter((_, index) => (off[index] ?? 0) > limit && peak(index));
+};
+
+/** Points that stand out from their neighbours along the curve, largest residual first. */
 export const outliersOf = ({ residuals }: ModelAnswer, document: BenchDocument): readonly Outlier[] =>
   byCurve(residuals)
-    .flatMap(({ residuals: list }) => {
-      const used = list.filter(({ omitted }) => !omitted).map(({ percentOfRange }) => percentOfRange);
-      const middle = median(used);
-      const spread = NORMAL * median(used.map((value) => Math.abs(value - middle)));
-      const limit = Math.max(FAR * spread, NEAR_PERCENT);
-      return used.length < 4 ? [] : list.filter((r) => !r.omitted && Math.abs(r.percentOfRange - middle) > limit);
-    })
+    .flatMap(farOf)
     .sort((a, b) => Math.abs(b.percentOfRange) - Math.abs(a.percentOfRange))
     .map((residual) => ({ residual, text: outlierText(residual, document) }));
 

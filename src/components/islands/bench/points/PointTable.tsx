@@ -16,7 +16,7 @@ export function PointTable({ chart, curve }: { chart: BenchChart; curve: BenchCu
   const last = curve.points.length - 1;
 
   useEffect(() => {
-    if (chosen !== null) body.current?.rows[chosen]?.scrollIntoView({ block: 'nearest' });
+    if (chosen !== null) showRow(body.current?.rows[chosen]);
   }, [chosen]);
 
   const pick = (point: number) => {
@@ -30,7 +30,7 @@ export function PointTable({ chart, curve }: { chart: BenchChart; curve: BenchCu
     event.preventDefault();
     pick(to);
     announceSelection(tools);
-    body.current?.rows[to]?.focus();
+    body.current?.rows[to]?.focus({ preventScroll: true });
   };
 
   if (curve.points.length === 0) return null;
@@ -78,6 +78,16 @@ export function PointTable({ chart, curve }: { chart: BenchChart; curve: BenchCu
     </div>
   );
 }
+
+/** Scrolls the list, never the page, until a row is in sight below the head. */
+const showRow = (row: HTMLTableRowElement | undefined): void => {
+  const list = row?.closest<HTMLElement>('.bench-points');
+  if (!row || !list) return;
+  const head = row.offsetHeight;
+  if (row.offsetTop - head < list.scrollTop) list.scrollTop = row.offsetTop - head;
+  else if (row.offsetTop + row.offsetHeight > list.scrollTop + list.clientHeight)
+    list.scrollTop = row.offsetTop + row.offsetHeight - list.clientHeight;
+};
 
 interface PointRowProps {
   readonly chart: BenchChart;

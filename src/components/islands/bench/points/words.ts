@@ -44,3 +44,6 @@ export const placeWords = (chart: BenchChart, px: Px): string => {
   };
   return `${word('x', 0)}, ${word('y', 1)}`;
 };
+
+/** A residual: two digits, and nothing finer than a thousandth. */
+export const smallNumber = (value: number): string => (Math.abs(value) < 0.0005 ? 'under 0.001' : formatNumber(value, { digits: 2 }));

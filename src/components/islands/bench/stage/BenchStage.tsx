@@ -1,11 +1,11 @@
 import { useEffect, useId, useMemo, useRef, useState, type KeyboardEvent, type PointerEvent } from 'react';
 import { chartName, view, type BenchChart, type Size } from '@/lib/editor';
 import type { Px } from '@/lib/geometry';
-import { useBench, useChart, useTools } from '../state/tools';
+import { useBench, useChart, useTools, type BenchPage } from '../state/tools';
 import { stageKey, type KeyRequests } from './keys';
 import { Layers, type FittedLine } from './Layers';
 import { Loupe } from './Loupe';
-import { usePicture } from './pictures';
+import { usePicture, type LoadedPicture } from './pictures';
 import { PointerGestures } from './pointer';
 import { pointerOf } from './pointer-event';
 import { Readout } from './Readout';
@@ -68,8 +68,8 @@ export function BenchStage({ fitted, pictureOpacity, fittedOpacity, toolbar, ...
             pointsOnly={session.station === 'model'}
           />
         )}
-        <Loupe scene={scene} image={image} />
-        {chart && picture.kind !== 'ready' && <StageNote failed={picture.kind === 'failed' || !page} />}
+        {session.station !== 'chart' && <Loupe scene={scene} image={image} />}
+        <StageNote>{noteOf(chart, page, picture.kind)}</StageNote>
       </div>
       <p id={summary} className="sr-only">
         {stageSummary(chart, session.station)}
@@ -79,11 +79,16 @@ export function BenchStage({ fitted, pictureOpacity, fittedOpacity, toolbar, ...
   );
 }
 
-const StageNote = ({ failed }: { failed: boolean }) => (
-  <p className="bench-note" role="status">
-    {failed
-      ? 'The picture of this chart cannot be shown: load the page again, or choose another page at the chart station.'
-      : 'The picture is on its way.'}
+const noteOf = (chart: BenchChart | null, page: BenchPage | undefined, picture: LoadedPicture['kind']): string => {
+  if (!chart) return 'The picture of a chart stands here once a chart has been added.';
+  if (picture === 'failed' || !page)
+    return 'The picture of this chart cannot be shown: load the page again, or choose another page at the chart station.';
+  return picture === 'loading' ? 'The picture is on its way.' : '';
+};
+
+const StageNote = ({ children }: { children: string }) => (
+  <p className={children ? 'bench-note' : 'sr-only'} role="status">
+    {children}
   </p>
 );
 

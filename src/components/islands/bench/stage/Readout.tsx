@@ -1,7 +1,7 @@
 import { useCallback, useRef } from 'react';
 import { findChart, placeOfSelection, readyFrame } from '@/lib/editor';
 import { formatNumber, quantitySymbol, unitSymbol } from '@/lib/units';
-import { pixelText, valueTexts } from '../points/words';
+import { pixelText, smallNumber, valueTexts } from '../points/words';
 import { useChart, useTools } from '../state/tools';
 import { useFrame } from './use-frame';
 
@@ -30,7 +30,7 @@ export function Readout() {
         pixel <b ref={pixel}>–</b>
       </span>
       {chart && <FrameNote chart={chart} />}
-      <span ref={zoom} className="ml-auto" />
+      <span ref={zoom} className="ml-auto" hidden={!chart} />
     </p>
   );
 }
@@ -54,7 +54,7 @@ function FrameNote({ chart }: { chart: NonNullable<ReturnType<typeof useChart>> 
   const unit = chart.y.unit ? unitSymbol(chart.y.unit) : '';
   return (
     <span className="bench-wide">
-      frame good to {formatNumber(frame.residualPx, { digits: 2 })}&nbsp;px, that is {formatNumber(frame.residualInUnits.y, { digits: 2 })}
+      frame good to {smallNumber(frame.residualPx)}&nbsp;px, that is {smallNumber(frame.residualInUnits.y)}
       {unit && `\u00A0${unit}`}
     </span>
   );

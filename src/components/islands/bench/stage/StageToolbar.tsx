@@ -1,6 +1,6 @@
 import { Button } from '@/components/ui/Button';
 import { ToggleButton } from '@/components/ui/ToggleButton';
-import { Toolbar, ToolbarGap } from '@/components/ui/Toolbar';
+import { Toolbar } from '@/components/ui/Toolbar';
 import { ZOOM_STEP, type Tool } from '@/lib/editor';
 import { useSession, useTools } from '../state/tools';
 
@@ -28,19 +28,20 @@ export function StageToolbar({ onHelp }: { onHelp: () => void }) {
           )}
         </>
       )}
-      <ToolbarGap />
-      <Button size="small" icon aria-label="Zoom out" onPress={() => stage.zoom(1 / ZOOM_STEP)}>
-        −
-      </Button>
-      <Button size="small" icon aria-label="Zoom in" onPress={() => stage.zoom(ZOOM_STEP)}>
-        +
-      </Button>
-      <Button size="small" onPress={() => stage.fit()}>
-        Fit
-      </Button>
-      <Button size="small" variant="quiet" icon aria-label="Keys" onPress={onHelp}>
-        ?
-      </Button>
+      <span className="bench-zoom">
+        <Button size="small" icon aria-label="Zoom out" onPress={() => stage.zoom(1 / ZOOM_STEP)}>
+          −
+        </Button>
+        <Button size="small" icon aria-label="Zoom in" onPress={() => stage.zoom(ZOOM_STEP)}>
+          +
+        </Button>
+        <Button size="small" onPress={() => stage.fit()}>
+          Fit
+        </Button>
+        <Button size="small" variant="quiet" icon aria-label="Keys" onPress={onHelp}>
+          ?
+        </Button>
+      </span>
     </Toolbar>
   );
 }

@@ -7,6 +7,7 @@ import type { Px } from '@/lib/geometry';
  */
 export const INK = '#1B2430';
 export const HALO = '#FFFFFF';
+const OVER_PRINT = { halo: 1.5, haloColour: '#FFFFFFA6' } as const;
 export const RAMP = ['#3D2E6B', '#6B4FA3', '#8F6FC8'] as const;
 
 /** Dashes of the curves of a chart in turn, in CSS pixels. */
@@ -27,10 +28,19 @@ export type Pen = Pick<
   'beginPath' | 'moveTo' | 'lineTo' | 'arc' | 'rect' | 'closePath' | 'stroke' | 'setLineDash' | 'strokeStyle' | 'lineWidth'
 >;
 
+interface Stroke {
+  readonly width: number;
+  readonly colour: string;
+  /** What the halo adds to the width, and its colour: a line over print has a thin pale one, so that the print shows beside it. */
+  readonly halo?: number;
+  readonly haloColour?: string;
+  readonly dash?: readonly number[];
+}
+
 /** Twice over: first the wide halo, then the ink, so that the line shows on any ground. */
-function twice(pen: Pen, width: number, colour: string, unit: number, path: () => void, dash: readonly number[] = []): void {
+function twice(pen: Pen, unit: number, { width, colour, halo = 2.5, haloColour = HALO, dash = [] }: Stroke, path: () => void): void {
   for (const [stroke, extra, pattern] of [
-    [HALO, 2.5, []],
+    [haloColour, halo, []],
     [colour, 0, dash],
   ] as const) {
     pen.beginPath();
@@ -87,18 +97,19 @@ export function drawCurve(pen: Pen, curve: SceneCurve, points: readonly Px[], un
   const omitted = new Set(curve.omitted);
   const used = points.filter((_, index) => !omitted.has(index));
   const outline = OUTLINES[shapeOf(curve.style)];
-  if (!pointsOnly && used.length > 1) twice(pen, curve.active ? 2 : 1.25, colour, unit, () => polyline(pen, used), dashOf(curve.style));
+  if (!pointsOnly && used.length > 1)
+    twice(pen, unit, { width: curve.active ? 1.5 : 1, colour, dash: dashOf(curve.style), ...OVER_PRINT }, () => polyline(pen, used));
   if (used.length <= 60 || curve.active) {
     const radius = (curve.active ? 3.75 : 3) * unit;
-    twice(pen, 1.5, colour, unit, () => used.forEach(([x, y]) => outline(pen, x, y, radius)));
+    twice(pen, unit, { width: 1.5, colour }, () => used.forEach(([x, y]) => outline(pen, x, y, radius)));
   }
   const out = points.filter((_, index) => omitted.has(index));
-  if (out.length > 0) twice(pen, 1, INK, unit, () => out.forEach(([x, y]) => OUTLINES.cross(pen, x, y, 4 * unit)));
+  if (out.length > 0) twice(pen, unit, { width: 1, colour: INK }, () => out.forEach(([x, y]) => OUTLINES.cross(pen, x, y, 4 * unit)));
 }
 
 /** A line of the fitted family. */
 export function drawFitted(pen: Pen, points: readonly Px[], style: number, unit: number): void {
-  twice(pen, 1.5, colourOf(style), unit, () => polyline(pen, points));
+  twice(pen, unit, { width: 1.5, colour: colourOf(style), ...OVER_PRINT }, () => polyline(pen, points));
 }
 
 const arms = (pen: Pen, [x, y]: Px, inner: number, outer: number): void => {
@@ -115,16 +126,18 @@ const arms = (pen: Pen, [x, y]: Px, inner: number, outer: number): void => {
 
 /** A mark: cross-hairs in a ring; a mark without a value has the ring broken. */
 export function drawMark(pen: Pen, mark: SceneMark, px: Px, unit: number): void {
-  twice(pen, 1.4, INK, unit, () => arms(pen, px, 1.5 * unit, 10 * unit));
-  twice(pen, 1.4, INK, unit, () => OUTLINES.circle(pen, px[0], px[1], 5.5 * unit), mark.known === 'none' ? [3, 3] : []);
+  twice(pen, unit, { width: 1.4, colour: INK }, () => arms(pen, px, 1.5 * unit, 10 * unit));
+  twice(pen, unit, { width: 1.4, colour: INK, dash: mark.known === 'none' ? [3, 3] : [] }, () =>
+    OUTLINES.circle(pen, px[0], px[1], 5.5 * unit),
+  );
 }
 
 /** The ring round what is picked out. */
 export function drawSelected(pen: Pen, [x, y]: Px, unit: number): void {
-  twice(pen, 2, INK, unit, () => OUTLINES.circle(pen, x, y, 9 * unit));
+  twice(pen, unit, { width: 2, colour: INK }, () => OUTLINES.circle(pen, x, y, 9 * unit));
 }
 
 /** The keyboard's cross-hairs. */
 export function drawAim(pen: Pen, px: Px, unit: number): void {
-  twice(pen, 1.25, INK, unit, () => arms(pen, px, 3 * unit, 22 * unit));
+  twice(pen, unit, { width: 1.25, colour: INK }, () => arms(pen, px, 3 * unit, 22 * unit));
 }

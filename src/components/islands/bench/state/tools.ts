@@ -57,8 +57,10 @@ export const useSaveState = () => {
   return useSyncExternalStore(saver.subscribe, saver.state);
 };
 
-/** Every page of the sheets, in order. */
-export const pagesOf = (reading: ReadingView): readonly BenchPage[] =>
-  reading.sheets.flatMap((sheet) =>
+/** Every page of the sheets, the reading's own sheet first; a picture that several sheets hold stands there once. */
+export const pagesOf = (reading: ReadingView): readonly BenchPage[] => {
+  const pages = reading.sheets.flatMap((sheet) =>
     sheet.pages.map((page: PageView) => ({ picture: page.picture, label: page.label, sheet: sheet.number || sheet.title })),
   );
+  return pages.filter(({ picture }, index) => pages.findIndex((page) => page.picture.id === picture.id) === index);
+};

@@ -27,7 +27,7 @@ export function AxisFields({ name, value, onChange, disabled }: AxisFieldsProps)
         choices={QUANTITY_CHOICES}
         value={value.quantity}
         onChange={(quantity) => onChange({ quantity, unit: usualUnit(quantity) })}
-        placeholder="Choose what it shows"
+        placeholder="Choose"
       />
       <NativeSelect<string>
         label={`${name}: unit`}

@@ -8,7 +8,7 @@ import { useTools } from '../state/tools';
 import { AxisFields } from './AxisFields';
 import { KIND_CHOICES } from './choices';
 import { Missing } from './Missing';
-import { NextStation } from './NextStation';
+import { StationHead } from './StationHead';
 
 const SIDES = [
   { id: 'hot', label: 'hot side' },
@@ -22,7 +22,7 @@ export function ChartStation({ chart }: { chart: BenchChart }) {
   const { id } = chart;
   return (
     <div className="bench-panel">
-      <h2>What this chart shows</h2>
+      <StationHead title="Chart" next="frame" onward="Go on to the frame" />
       <NativeSelect<ChartKind>
         label="Kind of chart"
         choices={KIND_CHOICES}
@@ -94,14 +94,11 @@ export function ChartStation({ chart }: { chart: BenchChart }) {
         />
       )}
       <Missing sentences={chartState(chart).chart} ready="All told. Next is the frame." />
-      <div className="flex flex-wrap gap-2">
-        <NextStation station="frame">Go on to the frame</NextStation>
-        {!frozen && (
-          <Button variant="quiet" onPress={() => perform({ type: 'removeChart', chart: id })}>
-            Remove this chart
-          </Button>
-        )}
-      </div>
+      {!frozen && (
+        <Button variant="quiet" className="justify-self-start" onPress={() => perform({ type: 'removeChart', chart: id })}>
+          Remove this chart
+        </Button>
+      )}
     </div>
   );
 }

@@ -6,7 +6,7 @@ import { PointTable } from '../points/PointTable';
 import { addCurve } from '../state/actions';
 import { useCurve, useTools } from '../state/tools';
 import { Missing } from './Missing';
-import { NextStation } from './NextStation';
+import { StationHead } from './StationHead';
 
 /** The curves of a chart, their values and their points. */
 export function CurvesStation({ chart }: { chart: BenchChart }) {
@@ -14,7 +14,7 @@ export function CurvesStation({ chart }: { chart: BenchChart }) {
   const curve = useCurve();
   return (
     <div className="bench-panel">
-      <h2>Curves</h2>
+      <StationHead title="Curves" next="model" onward="Go on to the model" />
       <CurveTable chart={chart} />
       {!tools.frozen && (
         <div className="flex flex-wrap gap-2">
@@ -37,7 +37,6 @@ export function CurvesStation({ chart }: { chart: BenchChart }) {
       <PlaceEditor chart={chart} />
       {curve && <PointTable chart={chart} curve={curve} />}
       <Missing sentences={chartState(chart).curves} ready="All curves of this chart are ready for the model." />
-      <NextStation station="model">Go on to the model</NextStation>
     </div>
   );
 }

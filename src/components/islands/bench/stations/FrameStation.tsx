@@ -3,13 +3,14 @@ import { Menu } from '@/components/ui/Menu';
 import { NativeSelect } from '@/components/ui/NativeSelect';
 import { chartName, chartState, frameOf, type BenchChart } from '@/lib/editor';
 import type { Frame, FrameKind } from '@/lib/geometry';
-import { formatNumber, unitSymbol } from '@/lib/units';
+import { unitSymbol } from '@/lib/units';
 import { placeAt } from '../state/actions';
 import { useBench, useTools } from '../state/tools';
 import { MarkTable } from '../points/MarkTable';
 import { PlaceEditor } from '../points/PlaceEditor';
+import { smallNumber } from '../points/words';
 import { Missing } from './Missing';
-import { NextStation } from './NextStation';
+import { StationHead } from './StationHead';
 
 const KINDS = [
   { id: 'auto', label: 'as the marks ask' },
@@ -25,7 +26,7 @@ export function FrameStation({ chart }: { chart: BenchChart }) {
   const outcome = frameOf(chart);
   return (
     <div className="bench-panel">
-      <h2>Marks</h2>
+      <StationHead title="Frame" next="curves" onward="Go on to the curves" />
       <p className="muted">
         Click a tick whose value is printed, and type that value. Two corners with both values are enough; more marks tell how good the
         frame is.
@@ -46,7 +47,6 @@ export function FrameStation({ chart }: { chart: BenchChart }) {
       />
       {outcome.ok && <FrameFacts frame={outcome.frame} chart={chart} />}
       <Missing sentences={chartState(chart).frame} ready="The frame stands. Next are the curves." />
-      <NextStation station="curves">Go on to the curves</NextStation>
     </div>
   );
 }
@@ -57,7 +57,7 @@ function FrameFacts({ frame, chart }: { frame: Frame; chart: BenchChart }) {
     const value = frame.residualInUnits[axis];
     const { unit } = chart[axis];
     const symbol = unit ? unitSymbol(unit) : '';
-    return value === null ? '–' : `${formatNumber(value, { digits: 2 })}${symbol && `\u00A0${symbol}`}`;
+    return value === null ? '–' : `${smallNumber(value)}${symbol && `\u00A0${symbol}`}`;
   };
   return (
     <dl className="pairs">
@@ -68,7 +68,7 @@ function FrameFacts({ frame, chart }: { frame: Frame; chart: BenchChart }) {
         <dd>no mark to spare</dd>
       ) : (
         <dd>
-          {formatNumber(frame.residualPx, { digits: 2 })}&nbsp;px, that is {units('x')} in x and {units('y')} in y
+          {smallNumber(frame.residualPx)}&nbsp;px, that is {units('x')} in x and {units('y')} in y
         </dd>
       )}
     </dl>

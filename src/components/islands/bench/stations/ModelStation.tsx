@@ -8,7 +8,7 @@ import { byCurve, outliersOf } from '../model/outliers';
 import { ResidualTable } from '../model/ResidualPlot';
 import type { ModelState } from '../model/use-model';
 import { useBench, useTools } from '../state/tools';
-import { NextStation } from './NextStation';
+import { StationHead } from './StationHead';
 
 /** How the fitted curves lie over the picture. */
 export interface Overlay {
@@ -30,22 +30,20 @@ export function ModelStation({ model: { answer, fault, busy, again }, overlay, o
   const document = useBench((state) => state.history.present);
   return (
     <div className="bench-panel" aria-busy={busy}>
-      <div className="flex items-baseline gap-2">
-        <h2>Model</h2>
+      <StationHead title="Model" next="hand-in" onward="Go on to hand in">
         <span role="status" className="muted">
           {busy ? 'fitting' : ''}
         </span>
-        <Button size="small" variant="quiet" className="ml-auto" onPress={again}>
-          Fit again
-        </Button>
-      </div>
+      </StationHead>
       {document.charts.length === 0 && <p className="muted">There is no chart to fit yet: add one at the chart station.</p>}
       {fault && (
         <p role="alert" className="notice notice-attention">
-          {fault}
+          {fault}{' '}
+          <Button size="small" onPress={again}>
+            Fit again
+          </Button>
         </p>
       )}
-      {answer && <Answer answer={answer} document={document} />}
       {answer?.result?.model && (
         <div className="bench-overlay">
           <Switch isSelected={overlay.shown} onChange={(shown) => onOverlay({ ...overlay, shown })}>
@@ -60,7 +58,7 @@ export function ModelStation({ model: { answer, fault, busy, again }, overlay, o
           />
         </div>
       )}
-      <NextStation station="hand-in">Go on to hand in</NextStation>
+      {answer && <Answer answer={answer} document={document} />}
     </div>
   );
 }
@@ -81,7 +79,7 @@ function Answer({ answer, document }: { answer: ModelAnswer; document: BenchDocu
           <h3>Residuals</h3>
           {outliers.length > 0 && (
             <div className="notice notice-attention">
-              <p className="font-semibold">Far from the rest of their curve</p>
+              <p className="font-semibold">These points stand out from their neighbours</p>
               <ul className="mt-1 flex flex-wrap gap-1">
                 {outliers.slice(0, 12).map(({ residual, text }) => (
                   <li key={text}>

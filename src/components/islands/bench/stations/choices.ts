@@ -14,15 +14,11 @@ export const KIND_CHOICES: readonly Choice<ChartKind>[] = [
   { id: 'cop-current', label: 'COP over current' },
 ];
 
-const capital = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
-
 /** Every quantity an axis may show, with its symbol. */
 export const QUANTITY_CHOICES: readonly Choice<Quantity>[] = QUANTITIES.map((quantity) => ({
   id: quantity,
   label:
-    quantityName(quantity) === quantitySymbol(quantity)
-      ? quantityName(quantity)
-      : `${capital(quantityName(quantity))}, ${quantitySymbol(quantity)}`,
+    quantityName(quantity) === quantitySymbol(quantity) ? quantityName(quantity) : `${quantitySymbol(quantity)}, ${quantityName(quantity)}`,
 }));
 
 /** A unit, or a share of a rating, as one choice: "W", "%:qmaxW". */
