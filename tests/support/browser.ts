@@ -47,12 +47,13 @@ export function useBrowser() {
   const base = inject('baseUrl');
   return {
     base,
-    async visit(options: { width?: number; height?: number; dark?: boolean; touch?: boolean } = {}): Promise<Visitor> {
+    async visit(options: { width?: number; height?: number; dark?: boolean; touch?: boolean; script?: boolean } = {}): Promise<Visitor> {
       const context = await browser.newContext({
         baseURL: base,
         viewport: { width: options.width ?? 1440, height: options.height ?? 900 },
         colorScheme: options.dark ? 'dark' : 'light',
         hasTouch: options.touch ?? false,
+        javaScriptEnabled: options.script ?? true,
         permissions: ['clipboard-read', 'clipboard-write'],
       });
       contexts.push(context);
