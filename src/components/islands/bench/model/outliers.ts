@@ -27,44 +27,48 @@ export const byCurve = (residuals: readonly Residual[]): readonly CurveResiduals
     .sort((a, b) => a.chart - b.chart || a.curve - b.curve);
 };
 
-const median = (values: readonly number[]): number => {
-  const sorted = values.toSorted((a, b) => a - b);
-  const middle = Math.floor(sorted.length / 2);
-  return sorted.length % 2 ? (sorted[middle] ?? 0) : ((sorted[middle - 1] ?? 0) + (sorted[middle] ?? 0)) / 2;
-};
-
-/** Scale of a normal distribution from its median absolute deviation. */
-const NORMAL = 1.4826;
-/** Robust standard deviations beyond which a point is worth a look. */
-const FAR = 5;
 /** Percent of the axis below which no point is called far, however even the rest is. */
 const NEAR_PERCENT = 0.3;
+/** Leaving the point out makes the run of the rest this many times smoother, in squares. */
+const SMOOTHER = 6;
 /** Curves with fewer points have no run that a point could be off. */
 const FEWEST = 5;
 
-/** How far each residual is off the line through its two neighbours; at an end, off the line through the next two. */
-const offNeighbours = (list: readonly Residual[]): readonly number[] => {
-  const at = (index: number) => list[index] ?? { px: [0, 0] as const, percentOfRange: 0 };
-  const line = (a: ReturnType<typeof at>, b: ReturnType<typeof at>, x: number) => {
-    const run = b.px[0] - a.px[0];
-    return Math.abs(run) < 1e-6
-      ? (a.percentOfRange + b.percentOfRange) / 2
-      : a.percentOfRange + ((b.percentOfRange - a.percentOfRange) * (x - a.px[0])) / run;
-  };
-  return list.map(({ px, percentOfRange }, index) => {
-    const [a, b] = index === 0 ? [1, 2] : index === list.length - 1 ? [index - 1, index - 2] : [index - 1, index + 1];
-    return percentOfRange - line(at(a), at(b), px[0]);
-  });
+/** How far a residual is off the line through two others. */
+const offLine = ({ px, percentOfRange }: Residual, a: Residual, b: Residual): number => {
+  const run = b.px[0] - a.px[0];
+  const share = Math.abs(run) < 1e-6 ? 0.5 : (px[0] - a.px[0]) / run;
+  return percentOfRange - (a.percentOfRange + share * (b.percentOfRange - a.percentOfRange));
 };
 
-/** A form that does not fit bends residuals evenly along a curve; a slip of the hand stands out from its neighbours. */
+/** How far the residual at `index` is off its two neighbours; at an end, off the next two. */
+const offNeighbours = (list: readonly Residual[], index: number): number => {
+  const first = Math.min(Math.max(index - 1, 0), list.length - 3);
+  const [a, b] = [first, first + 1, first + 2].filter((other) => other !== index).map((other) => list[other]);
+  const here = list[index];
+  return here && a && b ? offLine(here, a, b) : 0;
+};
+
+/** Sum of the squares by which inner residuals are off their neighbours. */
+const roughness = (list: readonly Residual[]): number =>
+  list.reduce((sum, _, index) => (index === 0 || index === list.length - 1 ? sum : sum + offNeighbours(list, index) ** 2), 0);
+
+/**
+ * Residuals that stand out along a curve. A form that does not fit bends them evenly; a slip of the hand is a single one
+ * without which the run of the rest is much smoother. Found one at a time.
+ */
 const farOf = ({ residuals }: CurveResiduals): readonly Residual[] => {
-  const used = residuals.filter(({ omitted }) => !omitted);
-  if (used.length < FEWEST) return [];
-  const off = offNeighbours(used).map(Math.abs);
-  const limit = Math.max(FAR * NORMAL * median(off), NEAR_PERCENT);
-  const peak = (index: number) => Math.max(off[index - 1] ?? 0, off[index + 1] ?? 0) <= (off[index] ?? 0);
-  return used.filter((_, index) => (off[index] ?? 0) > limit && peak(index));
+  const far: Residual[] = [];
+  let list = residuals.filter(({ omitted }) => !omitted);
+  while (list.length >= FEWEST) {
+    const without = list.map((_, index) => ({ index, left: roughness(list.toSpliced(index, 1)) }));
+    const best = without.reduce((a, b) => (b.left < a.left ? b : a));
+    const slip = list[best.index];
+    if (!slip || best.left * SMOOTHER > roughness(list) || Math.abs(offNeighbours(list, best.index)) < NEAR_PERCENT) break;
+    far.push(slip);
+    list = list.toSpliced(best.index, 1);
+  }
+  return far;
 };
 
 /** Points that stand out from their neighbours along the curve, largest residual first. */
