@@ -33,6 +33,7 @@ const TABLE: Record<OperationName, readonly Who[]> = {
   removePage: [E, L],
   startReading: [E, L],
   picture: [E, L, D, A],
+  thumbnail: [E, L, D, A],
   original: [E, L, D, A],
   readings: [E, L],
   reading: [E, L, D, A],

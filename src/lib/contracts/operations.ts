@@ -245,6 +245,16 @@ export const operations = {
     media: 'image/png',
     revalidates: true,
   }),
+  thumbnail: operation({
+    method: 'GET',
+    path: '/api/pictures/{id}/thumbnail',
+    tag: 'sheets',
+    summary: 'A small copy of the picture, for lists; never measured',
+    may: 'catalogue.see',
+    params: idParams,
+    status: 200,
+    media: 'image/webp',
+  }),
   original: operation({
     method: 'GET',
     path: '/api/pictures/{id}/original',

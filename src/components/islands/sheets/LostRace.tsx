@@ -1,3 +1,4 @@
+import { useEffect, useRef } from 'react';
 import { Button } from '@/components/ui/Button';
 import { Table } from '@/components/ui/Table';
 import type { Difference } from './differences';
@@ -21,8 +22,10 @@ const Stated = ({ words }: { words: string | null }) =>
 
 /** Somebody was quicker: both versions side by side, and the choice between them. */
 export function LostRace({ what, lines, onKeepMine, onTakeTheirs, busy }: Props) {
+  const box = useRef<HTMLDivElement>(null);
+  useEffect(() => box.current?.focus(), []);
   return (
-    <div role="alert" className="notice notice-attention mb-4">
+    <div ref={box} tabIndex={-1} role="alert" className="notice notice-attention mb-4">
       <h2>Somebody else saved this {what} while you were at it</h2>
       <p className="mt-1">Nothing is lost. Compare what differs, then keep yours over theirs or take theirs.</p>
       <Table

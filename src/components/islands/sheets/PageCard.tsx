@@ -22,7 +22,7 @@ export function PageCard({ sheetId, page, number, mayRemove, onRemoved, focusAft
     <li className="flex flex-col gap-1">
       <a href={picture.url} draggable={false} className="block h-44 border border-line bg-paper p-1">
         <img
-          src={picture.url}
+          src={`${picture.url}/thumbnail`}
           alt={`Page ${number}, ${page.label}: whole picture`}
           width={picture.width}
           height={picture.height}

@@ -35,7 +35,7 @@ function Modules(props: Props) {
   const desk = useModules(props.sheetId, props.modules);
   return (
     <section aria-labelledby="modules">
-      <div className="mb-2 flex flex-wrap items-baseline gap-x-3">
+      <div className="mb-2 flex flex-wrap items-center gap-x-3">
         <h2 id="modules" className="leading-6">
           Modules of {props.vendor}
         </h2>

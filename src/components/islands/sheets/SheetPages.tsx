@@ -42,7 +42,7 @@ function Pages({ sheetId, pages: first, mostBytes, mayUpload, mayEdit }: Props) 
   );
   return (
     <section aria-labelledby={HEADING}>
-      <div className="mb-2 flex flex-wrap items-baseline gap-x-3">
+      <div className="mb-2 flex flex-wrap items-center gap-x-3">
         <h2 id={HEADING} tabIndex={-1} className="leading-6">
           Pages
         </h2>

@@ -25,10 +25,16 @@ export function useLeaveGuard(unfinished: boolean, done?: RefObject<boolean>): v
   }, [unfinished, done]);
 }
 
-/** Moves the keyboard to an element once the page has been drawn again. */
-export const focusSoon = (id: string): void => {
-  requestAnimationFrame(() => document.getElementById(id)?.focus());
-};
+const FRAMES_TO_WAIT = 10;
+
+/** Moves the keyboard to an element that the next drawings of the page bring. */
+export function focusSoon(id: string, frames = FRAMES_TO_WAIT): void {
+  requestAnimationFrame(() => {
+    const element = document.getElementById(id);
+    if (element) element.focus();
+    else if (frames > 0) focusSoon(id, frames - 1);
+  });
+}
 
 const never = () => () => undefined;
 

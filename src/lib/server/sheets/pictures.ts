@@ -2,6 +2,7 @@ import { findPicture, readingStatesWithPicture, type PictureRecord } from '@db';
 import { can } from '@/lib/access';
 import type { SignedInPerson } from '../people';
 import { readKept } from '../pictures/store';
+import { thumbnailOf } from '../pictures/thumbnail';
 import { notFound } from '../refusal';
 
 const SETTLED = new Set(['approved', 'superseded', 'withdrawn']);
@@ -20,6 +21,12 @@ async function pictureFor(actor: SignedInPerson, id: number): Promise<PictureRec
 export async function intakePng(actor: SignedInPerson, id: number): Promise<{ bytes: Buffer; picture: PictureRecord }> {
   const picture = await pictureFor(actor, id);
   return { bytes: await readKept(picture.pngSha256), picture };
+}
+
+/** The picture for lists, made when it is first asked for. */
+export async function thumbnail(actor: SignedInPerson, id: number): Promise<{ make: () => Promise<Buffer>; picture: PictureRecord }> {
+  const picture = await pictureFor(actor, id);
+  return { picture, make: () => thumbnailOf(picture.pngSha256, () => readKept(picture.pngSha256)) };
 }
 
 /** The file as it was uploaded. */
