@@ -1,8 +1,7 @@
 import type { Known } from './knowns';
 import { distanceToLine, placesAt, projectionOfFrame, type Projection } from './projection';
-import { valueAt } from './scale';
 import type { Frame, Mark, Px } from './types';
-import { laidOut } from './scale';
+import { laidOut, valueAt } from './scale';
 
 const rms = (values: readonly number[]) => Math.sqrt(values.reduce((sum, value) => sum + value * value, 0) / values.length);
 

@@ -67,5 +67,5 @@ export async function decode(bytes: Uint8Array, { deep, alpha }: { readonly deep
 /** An 8-bit RGB picture as PNG, as the encoder writes it. */
 export const encodePng = (rgb: Uint8Array, width: number, height: number): Promise<Buffer> =>
   sharp(rgb, { raw: { width, height, channels: 3 }, limitInputPixels: MOST_PIXELS })
-    .png({ compressionLevel: 9, palette: false })
+    .png({ compressionLevel: 6, palette: false })
     .toBuffer();

@@ -49,10 +49,11 @@ function onWhite(rgba: Uint8Array): Laid {
   const rgb = new Uint8Array((rgba.length / 4) * 3);
   let transparent = false;
   for (let from = 0, to = 0; from < rgba.length; from += 4, to += 3) {
-    const alpha = rgba[from + 3] ?? 255;
+    const alpha = rgba[from + 3]!;
     transparent ||= alpha < 255;
     for (let channel = 0; channel < 3; channel++) {
-      rgb[to + channel] = Math.round(((rgba[from + channel] ?? 0) * alpha + 255 * (255 - alpha)) / 255);
+      const sample = rgba[from + channel]!;
+      rgb[to + channel] = alpha === 255 ? sample : Math.round((sample * alpha + 255 * (255 - alpha)) / 255);
     }
   }
   return { rgb, transparent };
