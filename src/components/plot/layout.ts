@@ -113,15 +113,26 @@ const endOf = (points: readonly Pair[], side: 'left' | 'right', x: (v: number) =
     null,
   );
 
+/** Dust below zero, as a share of the values, that is no reason to show negative values. */
+const DUST = 1e-6;
+
+/** The values that set the vertical range: a curve that ends on zero gets no room below it for its band or for rounding. */
+function aboveZero(values: readonly number[], limits: readonly number[]): readonly number[] {
+  const all = [...values, ...limits];
+  const largest = Math.max(0, ...all.map(Math.abs));
+  return values.some((value) => value < -DUST * largest) ? all : all.map((value) => Math.max(0, value));
+}
+
 /** Everything about a plot that does not depend on how wide the page is. */
 export function layoutPlot(data: PlotData, height = 320): PlotLayout {
   const points = [...data.curves, ...(data.dots ?? [])].flatMap((series) => series.points);
   const bands = data.curves.flatMap((curve) => curve.band ?? []);
   const xs = [...points.map(([x]) => x), ...(data.duty ? [data.duty.x] : [])];
   const read = [...points.map(([, y]) => y), ...(data.duty ? [data.duty.y] : [])];
-  // A band may dip below zero where its curve ends on the axis; that alone does not make room for negative values.
-  const floor = Math.min(...read) >= 0 ? 0 : -Infinity;
-  const ys = [...read, ...bands.flatMap(([, low, high]) => [Math.max(floor, low), high])];
+  const ys = aboveZero(
+    read,
+    bands.flatMap(([, low, high]) => [low, high]),
+  );
   const x = scaleLinear().domain(domainOf(data.x, xs)).range([0, 100]);
   const y = scaleLinear().domain(domainOf(data.y, ys)).range([height, 0]);
   const across = (value: number) => (x(value) / 100) * CURVE_WIDTH;

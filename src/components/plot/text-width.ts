@@ -1,7 +1,10 @@
-/** Widths of Roboto Flex in hundredths of the font size: digits and most letters near 55, a few far off it. */
-const NARROW = new Set([..." .,:;|!'()[]ijlIft/·\u00A0\u202F"]);
-const WIDE = new Set([...'mwMWQOΔΩ%@']);
+/** Widths of Roboto Flex in hundredths of the font size, as measured and rounded up: narrow signs, capitals, a few wide letters, all the rest. */
+const NARROW = new Set([..." .,:;|!'()[]ijlrIft/·°\u00A0\u202F"]);
+const WIDE = new Set([...'mwMWΩ%@']);
+const CAPITAL = /\p{Lu}/u;
 
-/** A cautious width of a line of text, px: never less than what Roboto Flex at normal width takes. */
+const hundredths = (letter: string): number => (NARROW.has(letter) ? 38 : WIDE.has(letter) ? 93 : CAPITAL.test(letter) ? 73 : 60);
+
+/** A cautious width of a line of text, px: not less than what Roboto Flex takes at normal width and weight. */
 export const textWidth = (text: string, fontPx: number): number =>
-  ([...text].reduce((sum, letter) => sum + (NARROW.has(letter) ? 34 : WIDE.has(letter) ? 88 : 61), 0) * fontPx) / 100;
+  ([...text].reduce((sum, letter) => sum + hundredths(letter), 0) * fontPx) / 100;

@@ -48,6 +48,11 @@ describe('axes', () => {
     expect(layoutPlot(banded).y.domain()[0]).toBe(0);
   });
 
+  test('do not reach below zero for the dust of rounding, but do for a curve that goes there', () => {
+    expect(layoutPlot({ x, y, curves: [straight('a', [0, 20], [60, -1e-12])] }).y.domain()[0]).toBe(0);
+    expect(layoutPlot({ x, y, curves: [straight('a', [0, 20], [60, -3])] }).y.domain()[0]).toBeLessThanOrEqual(-3);
+  });
+
   test('write their numbers with the decimals of their steps', () => {
     const { yTicks } = layoutPlot({ x, y: { ...y, domain: [0, 1] }, curves: [] });
     expect(yTicks.map(({ text }) => text)).toEqual(['0.0', '0.2', '0.4', '0.6', '0.8', '1.0']);
