@@ -254,6 +254,7 @@ export const operations = {
     params: idParams,
     status: 200,
     media: 'image/webp',
+    revalidates: true,
   }),
   original: operation({
     method: 'GET',
