@@ -22,6 +22,9 @@ export default defineConfig(
     files: ['**/*.mjs'],
     languageOptions: { globals: { process: 'readonly', console: 'readonly', URL: 'readonly', setTimeout: 'readonly', Buffer: 'readonly' } },
   },
-  { files: ['src/env.d.ts'], rules: { '@typescript-eslint/triple-slash-reference': 'off', '@typescript-eslint/consistent-type-imports': 'off' } },
+  {
+    files: ['src/env.d.ts'],
+    rules: { '@typescript-eslint/triple-slash-reference': 'off', '@typescript-eslint/consistent-type-imports': 'off' },
+  },
   ...roomRules,
 );
