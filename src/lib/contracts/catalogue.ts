@@ -115,6 +115,7 @@ export const moduleModel = z.strictObject({
   readingId: rowId,
   model,
   currents: z.array(z.number()).describe('A; those the sheet draws, else even steps'),
+  hotSides: z.array(z.number()).describe('°C; those the sheet draws'),
   engine: z.string(),
   hash: z.string(),
   readBy: z.string(),

@@ -13,9 +13,10 @@ const within = (value: number, [low, high]: Range) => {
   return value >= low - room && value <= high + room;
 };
 
-const shown = ([low, high]: Range, unit: string) => (low === high ? brief(low, unit) : `${brief(low, unit)} to ${brief(high, unit)}`);
+const shown = ([low, high]: Range, unit: string) =>
+  low === high ? `at ${brief(low, unit)}` : `from ${brief(low, unit)} to ${brief(high, unit)}`;
 
-/** Where a working point leaves what the sheet shows. */
+/** Where a working point leaves the ranges in which the model holds. */
 export function outsideSheet(duty: Duty, { model: { validity } }: Candidate, { currentA }: WorkingPoint): DutyNote[] {
   const looks = [
     { kind: 'current', name: 'current', value: currentA, range: validity.I, unit: 'A' },
@@ -24,7 +25,7 @@ export function outsideSheet(duty: Duty, { model: { validity } }: Candidate, { c
   ] as const;
   return looks
     .filter(({ value, range }) => !within(value, range))
-    .map(({ kind, name, value, range, unit }) => ({ kind, text: `${name} ${brief(value, unit)}, the sheet shows ${shown(range, unit)}` }));
+    .map(({ kind, name, value, range, unit }) => ({ kind, text: `${name} ${brief(value, unit)}, the model holds ${shown(range, unit)}` }));
 }
 
 /** Whether a module at the low end of its tolerance would still stay within the supply; null point: it does not reach the heat. */

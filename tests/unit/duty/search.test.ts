@@ -81,17 +81,17 @@ describe('a module that takes no power', () => {
 describe('notes on a match', () => {
   const notes = (one: Named, asked: Duty = duty) => matchOf(one, asked).notes.map(ordinarySpaces);
 
-  it('has none inside the sheet', () => {
+  it('has none where the model holds', () => {
     expect(notes(candidate())).toEqual([]);
     expect(matchOf(candidate()).inside).toBe(true);
   });
 
-  it('says where it leaves the currents, ΔT and hot sides of the sheet', () => {
+  it('says where it leaves the currents, ΔT and hot sides that the model holds for', () => {
     const narrow = candidate({ model: { validity: { I: [1, 3], deltaT: [0, 30], hotSideC: [27, 27] } } });
     expect(notes(narrow)).toEqual([
-      'current 3.64 A, the sheet shows 1 A to 3 A',
-      'ΔT 35 K, the sheet shows 0 K to 30 K',
-      'hot side 40 °C, the sheet shows 27 °C',
+      'current 3.64 A, the model holds from 1 A to 3 A',
+      'ΔT 35 K, the model holds from 0 K to 30 K',
+      'hot side 40 °C, the model holds at 27 °C',
     ]);
     expect(matchOf(narrow).inside).toBe(false);
   });

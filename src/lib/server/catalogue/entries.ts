@@ -51,6 +51,10 @@ export function drawnCurrents({ charts }: ReadingDocument): number[] {
   return [...new Set(values)].sort((a, b) => a - b);
 }
 
+/** Hot sides that charts are drawn for, °C, coldest first. */
+export const drawnHotSides = ({ charts }: ReadingDocument): number[] =>
+  [...new Set(charts.flatMap(({ hotSideC }) => hotSideC ?? []))].sort((a, b) => a - b);
+
 const allowedCurrent = ({ ratings }: ReadingRecord['module']): number | null => {
   const allowed = ratings.flatMap(({ imaxMeans, imaxA }) => (imaxMeans === 'allowed' && imaxA !== null ? [imaxA] : []));
   return allowed.length === 0 ? null : Math.min(...allowed);

@@ -18,7 +18,8 @@ import { moduleById, toModuleView } from '../parts';
 import { requireCan, type SignedInPerson } from '../people';
 import { toPictureView } from '../sheets';
 import { accessOf } from '../readings';
-import { approvedAt, drawnCurrents } from './entries';
+import { notFound } from '../refusal';
+import { approvedAt, drawnCurrents, drawnHotSides, toCandidateModel } from './entries';
 
 /** What everybody may know of a reading's way; the rest is between those who read and those who check. */
 const OPEN_DECISIONS = new Set(['approved', 'superseded', 'withdrawn', 'restored']);
@@ -74,12 +75,14 @@ export async function approvedModelOf(actor: SignedInPerson, moduleId: number): 
     moduleHistory(actor, moduleId),
   ]);
   const pictures = await evidencePictures(reading, vendorSheets);
-  const drawn = drawnCurrents(JSON.parse(record.document) as ReadingDocument);
+  const document = JSON.parse(record.document) as ReadingDocument;
+  const drawn = drawnCurrents(document);
   return {
     module: toModuleView(module),
     readingId: reading.id,
     model,
     currents: drawn.length > 0 && drawn.length <= MOST_CURVES ? drawn : evenCurrents(model.validity.I[1]),
+    hotSides: drawnHotSides(document),
     engine: record.engine,
     hash: record.hash,
     readBy: reading.owner.name,
@@ -88,5 +91,18 @@ export async function approvedModelOf(actor: SignedInPerson, moduleId: number): 
     sheets: vendorSheets.filter(({ id }) => id === reading.sheetId || pictures.some((picture) => picture.sheetId === id)).map(toSheet),
     pictures,
     history,
+  };
+}
+
+/** A module's page: identity always, the rest as far as a reading is approved. */
+export async function moduleShown(actor: SignedInPerson, id: string) {
+  if (!/^\d{1,12}$/.test(id)) throw notFound('module');
+  const module = toModuleView(await moduleById(Number(id)));
+  const approved = await approvedModelOf(actor, module.id);
+  return {
+    module,
+    approved,
+    candidate: approved && toCandidateModel(approved.model),
+    history: approved?.history ?? (await moduleHistory(actor, module.id)),
   };
 }

@@ -13,6 +13,9 @@ import {
 import { catalogueEntries, type CatalogueEntry } from '../catalogue';
 import { requireCan } from '../people';
 
+/** Most matches, and most misses, that a page shows. */
+const ROWS = 100;
+
 const partOf = ({ row, name }: CatalogueEntry) => ({ id: row.id, name, vendor: row.vendor.name, grade: row.grade });
 
 const toMatchView = ({ candidate, notes, ...rest }: DutyMatch<CatalogueEntry>): DutyMatchView => ({
@@ -28,7 +31,7 @@ const toMissView = ({ candidate, reasons, ...rest }: DutyMiss<CatalogueEntry>): 
 });
 
 /** Which approved modules do a duty, and why the others do not: at most `rows` of either. */
-export async function dutySearch(actor: Actor, duty: Duty, rows: number): Promise<DutyAnswer> {
+export async function dutySearch(actor: Actor, duty: Duty, rows = ROWS): Promise<DutyAnswer> {
   requireCan(actor, 'duty.search');
   const entries = await catalogueEntries();
   const { matches, misses, missCounts } = searchDuty(duty, entries);

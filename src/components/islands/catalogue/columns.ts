@@ -1,0 +1,28 @@
+import type { CatalogueSort } from '@/lib/contracts';
+import type { SortDirection } from '@/components/ui/sort';
+
+export interface Column {
+  readonly key: CatalogueSort;
+  readonly label: string;
+  readonly numeric: boolean;
+  /** Direction of the first press. */
+  readonly first: SortDirection;
+}
+
+const words = (key: CatalogueSort, label: string): Column => ({ key, label, numeric: false, first: 'ascending' });
+const numbers = (key: CatalogueSort, label: string, first: SortDirection = 'descending'): Column => ({ key, label, numeric: true, first });
+
+/** Columns of the catalogue that sort, in their order; what the model rests on comes last but one and does not. */
+export const COLUMNS: readonly Column[] = [
+  words('module', 'Module'),
+  words('vendor', 'Vendor'),
+  numbers('stages', 'Stages', 'ascending'),
+  numbers('couples', 'Couples', 'ascending'),
+  numbers('side', 'Plates / mm', 'ascending'),
+  numbers('height', 'Height / mm', 'ascending'),
+  numbers('imax', 'Imax / A'),
+  numbers('vmax', 'Vmax / V'),
+  numbers('qmax', 'Qmax / W'),
+  numbers('dtmax', 'ΔTmax / K'),
+];
+export const APPROVED: Column = { key: 'approved', label: 'Approved', numeric: false, first: 'descending' };
