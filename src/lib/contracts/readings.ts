@@ -142,8 +142,11 @@ export type ChangeRow = z.infer<typeof changeRow>;
 export const evidenceView = z.strictObject({
   reading: readingView,
   model: modelAnswer,
-  hash: z.string().nullable(),
+  hash: z.string().nullable().describe('of what was handed in; null for a draft'),
   handedInAt: instant.nullable(),
+  mayDecide: z.boolean().describe('a librarian who has not worked on it, whatever its state'),
+  ownWork: z.boolean().describe('this person has edited it or handed it in'),
+  moduleChanged: z.array(z.string()).describe('what of the module was changed after the hand-in, in words'),
   approved: z
     .strictObject({ readingId: rowId, changes: z.array(changeRow) })
     .nullable()

@@ -1,11 +1,13 @@
-import { approvedReadingOf, latestModel } from '@db';
-import type { ChangeRow, EvidenceView } from '@/lib/contracts';
+import { approvedReadingOf, latestModel, type ReadingRecord } from '@db';
+import { can } from '@/lib/access';
+import type { ChangeRow, EvidenceView, ModelAnswer } from '@/lib/contracts';
 import type { BenchDocument } from '@/lib/editor';
-import type { ReadingModel, ReadingResult } from '@/lib/reading';
+import type { ReadingModel, ReadingModule } from '@/lib/reading';
+import { canonicalHash } from '../hash';
 import type { SignedInPerson } from '../people';
-import { fitDraft, readingFor, readingView, toModelAnswer } from '../readings';
-
-const resultOf = (text: string) => JSON.parse(text) as ReadingResult;
+import { accessOf, fitDraft, ratingsBeside, readingFor, readingView, toModelAnswer, toReadingModule } from '../readings';
+import { Refusal } from '../refusal';
+import { storedModel } from './model-hash';
 
 const FIGURES = [
   { what: 'Seebeck coefficient α', unit: 'V/K', of: (model: ReadingModel) => model.alpha },
@@ -36,26 +38,67 @@ function changes(before: ReadingModel | null, after: ReadingModel | null): Chang
   return [...figures, ...ratings];
 }
 
-/** What was handed in or decided on, with all that a decision needs: refitted from the very draft, beside its frozen hash. */
+const NO_ANSWER: ModelAnswer = { result: null, fit: null, residuals: [], curves: [], ratings: [], problems: [] };
+
+/** The answer about a draft; what keeps it from being read is a problem to show, not a refusal of the page. */
+async function answerFor(reading: ReadingRecord, draft: BenchDocument, asHandedIn: ReadingModule | undefined): Promise<ModelAnswer> {
+  try {
+    return toModelAnswer(draft, reading.module, await fitDraft(reading, draft, asHandedIn));
+  } catch (error) {
+    if (!(error instanceof Refusal) || error.status !== 422) throw error;
+    return { ...NO_ANSWER, ratings: ratingsBeside(reading.module, null), problems: [{ chart: null, text: error.message }] };
+  }
+}
+
+/** What of a module is another now than when the reading was handed in. */
+export function moduleChanges(asHandedIn: ReadingModule, now: ReadingModule): string[] {
+  const differs = (key: keyof ReadingModule) => canonicalHash(asHandedIn[key] ?? null) !== canonicalHash(now[key] ?? null);
+  return MODULE_WORDS.filter(([key]) => differs(key)).map(([, words]) => words);
+}
+
+const MODULE_WORDS = [
+  ['vendor', 'vendor'],
+  ['partNumber', 'part number'],
+  ['variant', 'variant'],
+  ['stages', 'stages'],
+  ['couples', 'couples'],
+  ['coldPlateMm', 'cold plate'],
+  ['hotPlateMm', 'hot plate'],
+  ['heightMm', 'height'],
+  ['maxTemperatureC', 'highest temperature'],
+  ['leadsOhm', 'lead resistance'],
+  ['rated', 'ratings'],
+  ['acResistanceOhm', 'AC resistance'],
+  ['acResistanceAtC', 'temperature of the AC resistance'],
+] as const satisfies readonly (readonly [keyof ReadingModule, string])[];
+
+/** The model in the catalogue now beside this one; null where this one is it, or where there is none. */
+async function againstApproved(reading: ReadingRecord, after: ReadingModel | null): Promise<EvidenceView['approved']> {
+  const standing = await approvedReadingOf(reading.module.id);
+  const model = standing && standing.id !== reading.id ? await latestModel(standing.id) : null;
+  return model ? { readingId: model.readingId, changes: changes(storedModel(model).result.model, after) } : null;
+}
+
+/**
+ * What was handed in or decided on, with all that a decision needs: fitted again from the very draft with the module as it
+ * was handed in, beside the frozen result and its hash. A draft is shown as it stands.
+ */
 export async function evidence(actor: SignedInPerson, id: number): Promise<EvidenceView> {
   const reading = await readingFor(actor, id);
   const draft = JSON.parse(reading.document) as BenchDocument;
-  const [view, fitted, model, standing] = await Promise.all([
-    readingView(actor, id),
-    fitDraft(reading, draft),
-    latestModel(id),
-    approvedReadingOf(reading.module.id),
-  ]);
-  const frozen = model ? resultOf(model.result) : null;
-  const answer = toModelAnswer(draft, reading.module, fitted);
-  const standingModel = standing && standing.id !== id ? await latestModel(standing.id) : null;
+  const model = reading.state === 'draft' ? null : await latestModel(id);
+  const frozen = model && storedModel(model);
+  const [view, answer] = await Promise.all([readingView(actor, id), answerFor(reading, draft, frozen?.document.module)]);
+  const result = frozen?.result ?? answer.result;
+  const access = accessOf(reading);
   return {
     reading: view,
-    model: frozen ? { ...answer, result: frozen } : answer,
+    model: { ...answer, result },
     hash: model?.hash ?? null,
     handedInAt: view.decisions.findLast((decision) => decision.what === 'handed-in')?.at ?? null,
-    approved: standingModel
-      ? { readingId: standingModel.readingId, changes: changes(resultOf(standingModel.result).model, frozen?.model ?? null) }
-      : null,
+    mayDecide: can(actor, 'reading.decide', access),
+    ownWork: access.ownerId === actor.id || Boolean(access.editorIds?.includes(actor.id)),
+    moduleChanged: frozen ? moduleChanges(frozen.document.module, toReadingModule(reading.module)) : [],
+    approved: await againstApproved(reading, result?.model ?? null),
   };
 }
