@@ -1,8 +1,9 @@
-import { useState } from 'react';
+import { useEffect, useState } from 'react';
 import { Input } from 'react-aria-components/Input';
 import { TextField } from 'react-aria-components/TextField';
 import { parseNumber, unitSymbol } from '@/lib/units';
 import { FieldLabel, FieldNotes, fieldClass, type FieldProps } from './Field';
+import { afterPointer, watchPointer } from './pointer';
 import { editableNumber, stepped } from './quantity-text';
 
 export interface QuantityFieldProps extends FieldProps {
@@ -61,8 +62,10 @@ export function QuantityField(props: QuantityFieldProps) {
   const [fault, setFault] = useState<string | null>(null);
   const shown = draft ?? editableNumber(value, digits);
 
+  useEffect(watchPointer, []);
+
   const settle = (sentence: string | null) => {
-    setFault(sentence);
+    afterPointer(() => setFault(sentence));
     if (sentence !== fault) onFault?.(sentence);
   };
   const take = (text: string, final: boolean) => {

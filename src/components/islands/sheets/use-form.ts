@@ -1,6 +1,7 @@
-import { useRef, useState, type SyntheticEvent } from 'react';
+import { useEffect, useRef, useState, type SyntheticEvent } from 'react';
 import { ApiProblem } from '@/components/islands/api';
 import type { FieldProblem } from '@/components/ui/ErrorSummary';
+import { afterPointer, watchPointer } from '@/components/ui/pointer';
 import { only, without, type Checked, type Problems } from './checked';
 import { useErrorTitle, useLeaveGuard } from './use-page';
 
@@ -42,6 +43,7 @@ export function useForm<Values extends object, Body, Answer>(options: FormOption
   const [busy, setBusy] = useState(false);
   const [signedOut, setSignedOut] = useState(false);
   const sent = useRef(false);
+  useEffect(watchPointer, []);
   useErrorTitle(summary.length > 0);
   useLeaveGuard(values !== initial, sent);
 
@@ -52,11 +54,14 @@ export function useForm<Values extends object, Body, Answer>(options: FormOption
     const found = checked.ok ? {} : only(checked.problems, names);
     const shown = settled ? found : Object.fromEntries(Object.entries(found).filter(([field]) => field in problems));
     setValues(after);
-    setProblems({ ...without(problems, names), ...shown });
+    afterPointer(() => setProblems((now) => ({ ...without(now, names), ...shown })));
   };
 
-  const fault = (field: string, sentence: string | null) =>
+  // the field itself shows its fault; here it is kept for the list of what is wrong
+  const fault = (field: string, sentence: string | null) => {
     setFaults((now) => (sentence === null ? without(now, [field]) : { ...now, [field]: sentence }));
+    if (sentence === null) afterPointer(() => setProblems((now) => without(now, [field])));
+  };
 
   const refuse = (found: Problems, whole: string | null = null) => {
     setProblems(found);
@@ -92,7 +97,7 @@ export function useForm<Values extends object, Body, Answer>(options: FormOption
   return {
     prefix,
     values,
-    problems: { ...problems, ...faults },
+    problems,
     summary,
     busy,
     signedOut,
