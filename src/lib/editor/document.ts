@@ -75,6 +75,9 @@ export interface BenchDocument {
   readonly note?: string | undefined;
 }
 
+/** Bounds of a draft, so that one row stays of a size that a screen can draw and a server can take. */
+export const LIMITS = { charts: 40, marks: 200, curves: 60, points: 20_000, through: 200, title: 120, note: 4000 } as const;
+
 /** A page picture that a chart may be read from. */
 export interface BenchPicture {
   readonly id: number;

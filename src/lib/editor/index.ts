@@ -6,7 +6,7 @@ export { apply } from './apply';
 export { insertionIndex } from './points';
 export { HISTORY_LIMIT, historyReducer, redoLabel, startHistory, undoLabel } from './history';
 export type { History, HistoryAction, HistoryRules, Step } from './history';
-export { benchDocument, LIMITS } from './schema';
+export { benchDocument } from './schema';
 export { frameOf, placeOf, readyFrame, unitsPerPixel, valueAt } from './frame';
 export { chartName, chartState, curveName, isFinished, problemsOf, progressOf, type ChartProblem, type ChartState } from './state';
 export { compareDocuments, sameDocument, tallyOf, type ChartDifference, type ChartTally } from './compare';

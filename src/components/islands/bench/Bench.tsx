@@ -1,4 +1,4 @@
-import { useMemo, useState, useSyncExternalStore } from 'react';
+import { lazy, Suspense, useMemo, useState, useSyncExternalStore } from 'react';
 import { ErrorBoundary } from '@/components/ui/ErrorBoundary';
 import { Toasts, useToasts } from '@/components/ui/Toast';
 import type { ReadingView } from '@/lib/contracts';
@@ -17,10 +17,12 @@ import { ChartStation } from './stations/ChartStation';
 import { CurvesStation } from './stations/CurvesStation';
 import { FrameStation } from './stations/FrameStation';
 import { HandInStation, Returned } from './stations/HandInStation';
-import { ModelStation, type Overlay } from './stations/ModelStation';
+import type { Overlay } from './stations/ModelStation';
 import { makeTools } from './state/make-tools';
 import { ToolsContext, useBench, useChart, useSession, useTools } from './state/tools';
 import { useSaving, useUndoKeys } from './state/use-lifetime';
+
+const ModelStation = lazy(() => import('./stations/ModelStation').then((room) => ({ default: room.ModelStation })));
 
 export interface BenchProps {
   readonly reading: ReadingView;
@@ -109,7 +111,13 @@ function StationPanel({ model, overlay, onOverlay }: StationPanelProps) {
   const { frozen } = useTools();
   const { station } = useSession();
   const chart = useChart();
-  if (station === 'model') return <ModelStation model={model} overlay={overlay} onOverlay={onOverlay} />;
+  if (station === 'model') {
+    return (
+      <Suspense fallback={<div className="bench-panel" aria-busy="true" />}>
+        <ModelStation model={model} overlay={overlay} onOverlay={onOverlay} />
+      </Suspense>
+    );
+  }
   if (station === 'hand-in') return <HandInStation model={model} />;
   if (!chart) {
     return (
