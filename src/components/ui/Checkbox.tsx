@@ -1,29 +1,30 @@
 import type { ReactNode } from 'react';
-import { Checkbox as AriaCheckbox, type CheckboxProps as AriaProps } from 'react-aria-components/Checkbox';
-import { Switch as AriaSwitch, type SwitchProps as AriaSwitchProps } from 'react-aria-components/Switch';
-import { classes } from './classes';
+import { CheckboxButton, CheckboxField, type CheckboxFieldProps } from 'react-aria-components/Checkbox';
+import { SwitchButton, SwitchField, type SwitchFieldProps } from 'react-aria-components/Switch';
 
-export interface CheckboxProps extends Omit<AriaProps, 'className' | 'style' | 'children'> {
+export interface CheckboxProps extends Omit<CheckboxFieldProps, 'className' | 'style' | 'children'> {
   children: ReactNode;
   className?: string;
 }
 
 export function Checkbox({ children, className, ...rest }: CheckboxProps) {
   return (
-    <AriaCheckbox {...rest} className={classes('check', className)}>
-      {({ isSelected, isIndeterminate }) => (
-        <>
-          <span className="check-box" aria-hidden="true">
-            {isIndeterminate ? '–' : isSelected ? '✓' : ''}
-          </span>
-          <span>{children}</span>
-        </>
-      )}
-    </AriaCheckbox>
+    <CheckboxField {...rest} className={className}>
+      <CheckboxButton className="check">
+        {({ isSelected, isIndeterminate }) => (
+          <>
+            <span className="check-box" aria-hidden="true">
+              {isIndeterminate ? '–' : isSelected ? '✓' : ''}
+            </span>
+            <span>{children}</span>
+          </>
+        )}
+      </CheckboxButton>
+    </CheckboxField>
   );
 }
 
-export interface SwitchProps extends Omit<AriaSwitchProps, 'className' | 'style' | 'children'> {
+export interface SwitchProps extends Omit<SwitchFieldProps, 'className' | 'style' | 'children'> {
   children: ReactNode;
   className?: string;
 }
@@ -31,9 +32,11 @@ export interface SwitchProps extends Omit<AriaSwitchProps, 'className' | 'style'
 /** On or off, taking effect at once. */
 export function Switch({ children, className, ...rest }: SwitchProps) {
   return (
-    <AriaSwitch {...rest} className={classes('check', className)}>
-      <span className="switch-track" aria-hidden="true" />
-      <span>{children}</span>
-    </AriaSwitch>
+    <SwitchField {...rest} className={className}>
+      <SwitchButton className="check">
+        <span className="switch-track" aria-hidden="true" />
+        <span>{children}</span>
+      </SwitchButton>
+    </SwitchField>
   );
 }

@@ -1,4 +1,4 @@
-import { Radio, RadioGroup as AriaRadioGroup } from 'react-aria-components/RadioGroup';
+import { RadioButton, RadioField, RadioGroup as AriaRadioGroup } from 'react-aria-components/RadioGroup';
 import { FieldLabel, FieldNotes, fieldClass, type FieldProps } from './Field';
 import type { Choice } from './Select';
 import { classes } from './classes';
@@ -27,12 +27,14 @@ export function RadioGroup<Id extends string>(props: RadioGroupProps<Id>) {
       <FieldLabel label={label} hideLabel={hideLabel} />
       <div className={classes('flex', orientation === 'vertical' ? 'flex-col' : 'flex-wrap gap-x-4')}>
         {choices.map((choice) => (
-          <Radio key={choice.id} value={choice.id} isDisabled={choice.disabled} className="check">
-            <span className="check-box check-round" aria-hidden="true" />
-            <span>
-              {choice.label} {choice.hint && <span className="muted">{choice.hint}</span>}
-            </span>
-          </Radio>
+          <RadioField key={choice.id} value={choice.id} isDisabled={choice.disabled}>
+            <RadioButton className="check">
+              <span className="check-box check-round" aria-hidden="true" />
+              <span>
+                {choice.label} {choice.hint && <span className="muted">{choice.hint}</span>}
+              </span>
+            </RadioButton>
+          </RadioField>
         ))}
       </div>
       <FieldNotes description={description} error={error} />
