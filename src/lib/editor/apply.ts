@@ -1,3 +1,4 @@
+import type { Px } from '@/lib/geometry';
 import { changed, changedById, same, withoutId } from './change';
 import type { Command } from './commands';
 import type { BenchChart, BenchCurve, BenchDocument } from './document';
@@ -41,6 +42,16 @@ const withCurves = (chart: BenchChart, curves: BenchChart['curves']): BenchChart
 const axisChange = <T extends { quantity: unknown; of?: unknown }>(before: T, to: Partial<T>): T =>
   changed(before, to.quantity !== undefined && to.quantity !== before.quantity && !('of' in to) ? { ...to, of: undefined } : to);
 
+/** Nothing is placed outside the picture; a place beyond an edge comes to lie on it. */
+const inside = ({ width, height }: BenchChart, [x, y]: Px): Px =>
+  roundPx([Math.min(width, Math.max(0, x)), Math.min(height, Math.max(0, y))]);
+
+/** The command with its place, if it has one, inside the picture. */
+const placedInside = (chart: BenchChart, command: CurveCommand): CurveCommand => {
+  if (command.type === 'addPoint') return { ...command, px: inside(chart, command.px) };
+  return command.type === 'movePoint' ? { ...command, to: inside(chart, command.to) } : command;
+};
+
 const setKind = (chart: BenchChart, kind: Parameters<typeof kindAxes>[0]): BenchChart => {
   const to = kindAxes(kind);
   return changed(chart, {
@@ -69,11 +80,11 @@ const applyToChart = (chart: BenchChart, command: ChartCommand): BenchChart => {
     case 'setFrameKind':
       return changed(chart, { frame: command.kind });
     case 'addMark':
-      return { ...chart, marks: [...chart.marks, { ...command.mark, px: roundPx(command.mark.px) }] };
+      return { ...chart, marks: [...chart.marks, { ...command.mark, px: inside(chart, command.mark.px) }] };
     case 'moveMark':
       return withMarks(
         chart,
-        changedById(chart.marks, command.mark, (mark) => changed(mark, { px: roundPx(command.to) })),
+        changedById(chart.marks, command.mark, (mark) => changed(mark, { px: inside(chart, command.to) })),
       );
     case 'setMark':
       return withMarks(
@@ -89,7 +100,7 @@ const applyToChart = (chart: BenchChart, command: ChartCommand): BenchChart => {
     default:
       return withCurves(
         chart,
-        changedById(chart.curves, command.curve, (curve) => applyToCurve(curve, command)),
+        changedById(chart.curves, command.curve, (curve) => applyToCurve(curve, placedInside(chart, command))),
       );
   }
 };

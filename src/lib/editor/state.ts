@@ -1,3 +1,4 @@
+import type { Px } from '@/lib/geometry';
 import { formatWithUnit, quantityName } from '@/lib/units';
 import type { BenchChart, BenchCurve } from './document';
 import { frameOf, readyFrame } from './frame';
@@ -48,6 +49,13 @@ const chartSentences = (chart: BenchChart): readonly string[] => {
   return [...missing, ...(clash ? [clash] : []), ...side];
 };
 
+const isOutside = ({ width, height }: BenchChart, [x, y]: Px): boolean => x < 0 || y < 0 || x > width || y > height;
+
+const outsideSentence = (chart: BenchChart, what: string, places: readonly Px[]): readonly string[] => {
+  const outside = places.filter((px) => isOutside(chart, px)).length;
+  return outside === 0 ? [] : [`${outside} of ${places.length} ${what} lie outside the picture: move or remove them.`];
+};
+
 const frameSentences = (chart: BenchChart): readonly string[] => {
   if (chart.marks.length === 0)
     return ['Place a mark on a tick of the x axis and one on a tick of the y axis, and type what is printed there.'];
@@ -56,7 +64,13 @@ const frameSentences = (chart: BenchChart): readonly string[] => {
     mark.x === null && mark.y === null ? [`Mark ${index + 1} has no value yet: type its x value, its y value or both.`] : [],
   );
   if (empty.length > 0) return empty;
-  return outcome.ok ? [] : [outcome.message];
+  return outcome.ok
+    ? outsideSentence(
+        chart,
+        'marks',
+        chart.marks.map(({ px }) => px),
+      )
+    : [outcome.message];
 };
 
 /** A curve's value with its unit, or its number in the list while it has none: "1.4 A", "curve 2". */
@@ -79,7 +93,12 @@ const curveSentence = (chart: BenchChart, curve: BenchCurve): string | null => {
 
 const curveSentences = (chart: BenchChart): readonly string[] => {
   if (chart.curves.length === 0) return ['Add a curve and place points on its line.'];
-  return [...new Set(chart.curves.flatMap((curve) => curveSentence(chart, curve) ?? []))];
+  const outside = outsideSentence(
+    chart,
+    'points',
+    chart.curves.flatMap(({ points }) => points),
+  );
+  return [...new Set([...chart.curves.flatMap((curve) => curveSentence(chart, curve) ?? []), ...outside])];
 };
 
 const known = new WeakMap<BenchChart, ChartState>();

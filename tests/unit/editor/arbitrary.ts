@@ -11,6 +11,8 @@ const markId = fc.constantFrom('m1', 'm2', 'm3', 'm4');
 const curveId = fc.constantFrom('k1', 'k2', 'k3');
 const coordinate = fc.integer({ min: -50_000, max: 1_050_000 }).map((n) => n / 1000);
 export const px = fc.tuple(coordinate, coordinate);
+/** A place inside the picture. */
+const placed = fc.tuple(...[1_000_000, 700_000].map((max) => fc.integer({ min: 0, max }).map((n) => n / 1000))) as unknown as typeof px;
 const value = fc.option(fc.integer({ min: -400, max: 400 }).map((n) => n / 8));
 const point = fc.nat({ max: 5 });
 
@@ -60,7 +62,7 @@ const finishedChart = (index: number) =>
       side: fc.constantFrom('hot', 'cold'),
       frame: fc.constantFrom(null, 'upright'),
       values: fc.uniqueArray(fc.integer({ min: 1, max: 90 }), { minLength: 1, maxLength: 4 }),
-      points: fc.array(px, { minLength: 3, maxLength: 12 }),
+      points: fc.array(placed, { minLength: 3, maxLength: 12 }),
       leftOut: fc.nat({ max: 2 }),
       origin: fc.constantFrom('hand', 'followed', 'path'),
     })

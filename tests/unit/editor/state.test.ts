@@ -12,10 +12,13 @@ import {
   placeOf,
   progressOf,
   unitsPerPixel,
+  usualUnit,
   valueAt,
   type BenchChart,
   type Command,
 } from '@/lib/editor';
+import { rolesOf } from '@/lib/reading';
+import { QUANTITIES } from '@/lib/units';
 import { picture } from './arbitrary';
 
 type OfChart<C> = C extends { readonly chart: string } ? Omit<C, 'chart'> : never;
@@ -61,6 +64,29 @@ describe('what a chart still misses', () => {
     expect(chartState(chart(...heat, { type: 'setAxis', ...change })).chart).toEqual([expect.stringMatching(sentence)]);
   });
 
+  test('every triple of quantities at either side is taken or refused as the reading document takes or refuses it', () => {
+    for (const x of QUANTITIES)
+      for (const y of QUANTITIES)
+        for (const family of QUANTITIES)
+          for (const kind of ['hot', 'cold'] as const) {
+            const roles = rolesOf({
+              x: { quantity: x },
+              y: { quantity: y },
+              family: { quantity: family },
+              [kind === 'hot' ? 'hotSideC' : 'coldSideC']: 27,
+            });
+            const set = (axis: 'x' | 'y', quantity: typeof x) =>
+              ({ type: 'setAxis', axis, to: { quantity, unit: usualUnit(quantity) } }) as const;
+            const told = chart(
+              set('x', x),
+              set('y', y),
+              { type: 'setFamily', to: { quantity: family } },
+              { type: 'setSide', to: { kind, celsius: 27 } },
+            );
+            expect([x, y, family, kind, chartState(told).chart.length === 0]).toEqual([x, y, family, kind, roles.ok]);
+          }
+  });
+
   test('voltage may answer a current and a current a voltage', () => {
     expect(chartState(chart({ type: 'setKind', kind: 'voltage-current' }, { type: 'setSide', to: { celsius: 27 } })).chart).toEqual([]);
   });
@@ -91,6 +117,29 @@ describe('what a chart still misses', () => {
       'Heat pumped, 27\u00A0°C',
       'Page 3',
     ]);
+  });
+});
+
+describe('places outside the picture', () => {
+  test('are not taken: a place beyond an edge comes to lie on it', () => {
+    const edge = chart(
+      ...framed,
+      ...curve,
+      { type: 'movePoint', curve: 'k1', point: 0, to: [1200, -3] },
+      { type: 'moveMark', mark: 'm1', to: [-5, 9999] },
+    );
+    expect([edge.curves[0]!.points[0], edge.marks[0]!.px]).toEqual([
+      [1000, 0],
+      [0, 700],
+    ]);
+  });
+
+  test('are told when a smaller picture has taken the place of the one that was read', () => {
+    const small = chart(...framed, ...curve, { type: 'setPicture', picture: { ...picture, width: 100 } });
+    expect(chartState(small)).toMatchObject({
+      frame: ['1 of 2 marks lie outside the picture: move or remove them.'],
+      curves: ['1 of 1 points lie outside the picture: move or remove them.'],
+    });
   });
 });
 

@@ -27,7 +27,14 @@ export function PageChoice({ onChosen }: { onChosen: () => void }) {
                 onChosen();
               }}
             >
-              <img src={page.picture.url} alt="" width={page.picture.width} height={page.picture.height} loading="lazy" decoding="async" />
+              <img
+                src={`${page.picture.url}/thumbnail`}
+                alt=""
+                width={page.picture.width}
+                height={page.picture.height}
+                loading="lazy"
+                decoding="async"
+              />
               <span>{page.label || page.picture.name}</span>
               <small>
                 {page.sheet}

@@ -31,7 +31,9 @@ function ChartTile({ chart, page }: { chart: BenchChart; page: BenchPage | null 
       aria-current={inHand ? 'true' : undefined}
       onClick={() => store.go({ type: 'chart', chart: chart.id })}
     >
-      {page && <img src={page.picture.url} alt="" width={chart.width} height={chart.height} loading="lazy" decoding="async" />}
+      {page && (
+        <img src={`${page.picture.url}/thumbnail`} alt="" width={chart.width} height={chart.height} loading="lazy" decoding="async" />
+      )}
       <span>{chartName(chart)}</span>
       <small>{progressOf(chart)}</small>
     </button>

@@ -19,6 +19,7 @@ export function LostRace() {
     <Dialog
       title="This reading was changed elsewhere"
       role="alertdialog"
+      mustAnswer
       wide
       isOpen
       onClose={() => {}}

@@ -35,6 +35,7 @@ export function UnsavedOffer() {
     <Dialog
       title="Work that was not saved"
       role="alertdialog"
+      mustAnswer
       wide
       isOpen
       onClose={() => {}}

@@ -2,7 +2,7 @@ import { Button } from '@/components/ui/Button';
 import { Menu } from '@/components/ui/Menu';
 import { NativeSelect } from '@/components/ui/NativeSelect';
 import { chartName, chartState, frameOf, type BenchChart } from '@/lib/editor';
-import type { Frame, FrameKind } from '@/lib/geometry';
+import { frameDoubt, type Frame, type FrameKind } from '@/lib/geometry';
 import { unitSymbol } from '@/lib/units';
 import { placeAt } from '../state/actions';
 import { useBench, useTools } from '../state/tools';
@@ -46,6 +46,7 @@ export function FrameStation({ chart }: { chart: BenchChart }) {
         isDisabled={frozen}
       />
       {outcome.ok && <FrameFacts frame={outcome.frame} chart={chart} />}
+      {outcome.ok && <FrameDoubt frame={outcome.frame} chart={chart} />}
       <Missing sentences={chartState(chart).frame} ready="The frame stands. Next are the curves." />
     </div>
   );
@@ -73,6 +74,15 @@ function FrameFacts({ frame, chart }: { frame: Frame; chart: BenchChart }) {
       )}
     </dl>
   );
+}
+
+/** A frame that stands but is unlikely to be what was meant. */
+function FrameDoubt({ frame, chart }: { frame: Frame; chart: BenchChart }) {
+  const known = chart.marks.flatMap(({ px, x, y }) =>
+    x === null && y === null ? [] : [{ px, ...(x !== null && { x }), ...(y !== null && { y }) }],
+  );
+  const doubt = frameDoubt(frame, known);
+  return doubt && <p className="notice notice-attention">{doubt}</p>;
 }
 
 /** Takes the marks of another chart, for pages whose charts are drawn alike. */
