@@ -95,7 +95,7 @@ const FIGURES: Readonly<Record<string, Letter>> = {
 
 const SIGNS: Readonly<Record<string, Letter>> = {
   ' ': [3.5, ''],
-  '.': [0.6, 'M.2 0h.1'],
+  '.': [2, 'M.2-.2h1.6v-1.4h-1.6z'],
   ',': [1.4, 'M1.2-.4L0 3.4'],
   ':': [0.6, 'M.2-1h.1M.2-11.5h.1'],
   ';': [1.4, 'M1.2-.4L0 3.4M1.2-11.5h.1'],
