@@ -14,13 +14,22 @@ interface FormProps {
   onClose: () => void;
 }
 
+/** Everything that was refused, in the order of the form. */
+function problemsOf(refused: Refused | null) {
+  if (!refused) return [];
+  const inForm = (['name', 'email', 'roles'] as const).flatMap((field) => {
+    const message = refused.fields[field];
+    return message === undefined ? [] : [{ field, message }];
+  });
+  return inForm.length > 0 ? inForm : [{ field: null, message: refused.detail }];
+}
+
 function AddForm({ team, onAdded, onClose }: FormProps) {
   const [email, setEmail] = useState('');
   const [name, setName] = useState('');
   const [roles, setRoles] = useState<Role[]>([]);
   const [refused, setRefused] = useState<Refused | null>(null);
   const fields = refused?.fields ?? {};
-  const general = refused && Object.keys(fields).length === 0 ? [{ field: null, message: refused.detail }] : [];
   return (
     <form
       noValidate
@@ -30,10 +39,7 @@ function AddForm({ team, onAdded, onClose }: FormProps) {
         setRefused(await team.add({ email, name, roles }, onAdded));
       }}
     >
-      <ErrorSummary
-        problems={[...Object.entries(fields).map(([field, message]) => ({ field, message })), ...general]}
-        title="Nobody was added"
-      />
+      <ErrorSummary problems={problemsOf(refused)} title="Nobody was added" />
       <TextField label="Name" name="name" autoComplete="off" value={name} onChange={setName} error={fields.name} />
       <TextField
         label="E-mail address"

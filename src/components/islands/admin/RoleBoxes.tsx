@@ -25,7 +25,7 @@ export function RoleBoxes({
     <fieldset className="field" aria-describedby={error ? id : undefined}>
       <legend className="label">Roles</legend>
       {ROLES.map((role) => (
-        <Checkbox key={role} isSelected={roles.includes(role)} onChange={(on) => toggle(role, on)}>
+        <Checkbox key={role} name="roles" isSelected={roles.includes(role)} onChange={(on) => toggle(role, on)}>
           {role} <span className="muted">{MEANS[role]}</span>
         </Checkbox>
       ))}

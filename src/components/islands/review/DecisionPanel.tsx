@@ -105,6 +105,8 @@ function Panel(props: DecisionPanelProps) {
     if (said) status.current?.focus();
   }, [said]);
   const actions = ACTIONS[now.state];
+  // An approval has taken the place of the one that stood there.
+  const supersedes = props.supersedes && now.version === props.standing.version;
   const reasonError = outcome?.kind === 'field' ? outcome.sentence : null;
   return (
     <div className="flex flex-col gap-3">
@@ -127,7 +129,7 @@ function Panel(props: DecisionPanelProps) {
           </Button>
           <p className="hint mt-1">
             Freezes the reading under its hash and puts its model in the catalogue
-            {props.supersedes ? ', in place of the one that stands there now.' : '.'}
+            {supersedes ? ', in place of the one that stands there now.' : '.'}
           </p>
         </div>
       )}
@@ -137,7 +139,7 @@ function Panel(props: DecisionPanelProps) {
             Restore
           </Button>
           <p className="hint mt-1">
-            {props.supersedes
+            {supersedes
               ? 'A newer reading stands in the catalogue, so this one comes back as superseded.'
               : 'Brings its model back into the catalogue as it was.'}
           </p>
