@@ -52,7 +52,7 @@ export function ModuleRow({ module, draft, may, onStart, onEdit, onAddLike, chil
             <Button
               size="small"
               variant={draft === undefined ? 'plain' : 'quiet'}
-              aria-label={`Start a reading of ${name}`}
+              aria-label={draft === undefined ? `Start a reading of ${name}` : `Start another reading of ${name}`}
               isPending={starting}
               onPress={() => void start()}
             >
@@ -65,7 +65,7 @@ export function ModuleRow({ module, draft, may, onStart, onEdit, onAddLike, chil
             </Button>
           )}
           {may.add && (
-            <Button size="small" variant="quiet" aria-label={`Add a module like ${name}`} onPress={onAddLike}>
+            <Button size="small" variant="quiet" aria-label={`Add one like it: ${name}`} onPress={onAddLike}>
               Add one like it
             </Button>
           )}

@@ -49,7 +49,7 @@ function UploadRow({ upload, uploads }: { upload: Upload; uploads: Uploads }) {
         </Button>
       )}
       {progress.is === 'refused' && progress.worthRetrying && (
-        <Button size="small" aria-label={`Try ${upload.name} again`} onPress={() => uploads.again(upload)}>
+        <Button size="small" aria-label={`Try again: ${upload.name}`} onPress={() => uploads.again(upload)}>
           Try again
         </Button>
       )}
