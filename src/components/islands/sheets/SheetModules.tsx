@@ -36,7 +36,7 @@ function Modules(props: Props) {
   return (
     <section aria-labelledby="modules">
       <div className="mb-2 flex flex-wrap items-center gap-x-3">
-        <h2 id="modules" className="leading-6">
+        <h2 id="modules" className="mb-0 leading-6">
           Modules of {props.vendor}
         </h2>
         <Status>{desk.said}</Status>

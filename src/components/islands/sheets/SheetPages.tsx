@@ -43,7 +43,7 @@ function Pages({ sheetId, pages: first, mostBytes, mayUpload, mayEdit }: Props) 
   return (
     <section aria-labelledby={HEADING}>
       <div className="mb-2 flex flex-wrap items-center gap-x-3">
-        <h2 id={HEADING} tabIndex={-1} className="leading-6">
+        <h2 id={HEADING} tabIndex={-1} className="mb-0 leading-6">
           Pages
         </h2>
         <Status>{said}</Status>
