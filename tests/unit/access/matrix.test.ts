@@ -41,7 +41,9 @@ const wanted = (cell: Cell, object: Access): boolean => {
 };
 
 const cells = Object.entries(MATRIX).flatMap(([action, row]) =>
-  ROLES.flatMap((role, at) => Object.entries(OBJECTS).map(([name, object]) => ({ action: action as Action, role, name, object, cell: row[at] ?? 'no' }))),
+  ROLES.flatMap((role, at) =>
+    Object.entries(OBJECTS).map(([name, object]) => ({ action: action as Action, role, name, object, cell: row[at] ?? 'no' })),
+  ),
 );
 
 test.each(cells)('$role, $action, $name: $cell', ({ action, role, object, cell }) => {

@@ -13,14 +13,26 @@ const faultsOf = (variables: NodeJS.ProcessEnv): readonly string[] => {
 };
 
 test('an empty environment gives the defaults of .env.example', () => {
-  const lines = readFileSync('.env.example', 'utf8').split('\n').filter((line) => line && !line.startsWith('#'));
+  const lines = readFileSync('.env.example', 'utf8')
+    .split('\n')
+    .filter((line) => line && !line.startsWith('#'));
   const example = Object.fromEntries(lines.map((line) => [line.slice(0, line.indexOf('=')), line.slice(line.indexOf('=') + 1)]));
   expect(readConfig(example)).toEqual(readConfig({}));
 });
 
 test('every wrong value is listed, each with its name', () => {
-  const faults = faultsOf({ COUPLET_PORT: 'seven', COUPLET_DEMO: 'maybe', COUPLET_MAIL: 'pigeon', COUPLET_PUBLIC_ADDRESS: 'ftp://example.org' });
-  expect(faults.map((fault) => fault.split(' ')[0]).sort()).toEqual(['COUPLET_DEMO', 'COUPLET_MAIL', 'COUPLET_PORT', 'COUPLET_PUBLIC_ADDRESS']);
+  const faults = faultsOf({
+    COUPLET_PORT: 'seven',
+    COUPLET_DEMO: 'maybe',
+    COUPLET_MAIL: 'pigeon',
+    COUPLET_PUBLIC_ADDRESS: 'ftp://example.org',
+  });
+  expect(faults.map((fault) => fault.split(' ')[0]).sort()).toEqual([
+    'COUPLET_DEMO',
+    'COUPLET_MAIL',
+    'COUPLET_PORT',
+    'COUPLET_PUBLIC_ADDRESS',
+  ]);
 });
 
 test('demo mode refuses to listen beyond this machine and refuses a public address', () => {
@@ -35,5 +47,9 @@ test('SMTP without an address to send through stops the start', () => {
 
 test('cookies are secure exactly where the public address is https', () => {
   expect(readConfig({ COUPLET_DEMO: 'off', COUPLET_PUBLIC_ADDRESS: 'https://couplet.example.org' }).secure).toBe(true);
-  expect(readConfig({ COUPLET_PORT: '5000' })).toMatchObject({ secure: false, port: 5000, publicAddress: new URL('http://localhost:5000') });
+  expect(readConfig({ COUPLET_PORT: '5000' })).toMatchObject({
+    secure: false,
+    port: 5000,
+    publicAddress: new URL('http://localhost:5000'),
+  });
 });
