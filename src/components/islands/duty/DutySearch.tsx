@@ -1,8 +1,9 @@
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
-import { useRef, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { TemperatureRule } from '@/components/TemperatureRule';
 import type { RulePoint } from '@/components/temperature-rule';
 import { ErrorBoundary } from '@/components/ui/ErrorBoundary';
+import { afterPointer, watchPointer } from '@/components/ui/pointer';
 import type { DutyAnswer } from '@/lib/contracts';
 import { parseDuty, type Duty, type DutyParam, type ParsedDuty } from '@/lib/duty';
 import { formatWithUnit } from '@/lib/units';
@@ -64,7 +65,8 @@ function Search(props: Props) {
   const live = useLiveForm(form, texts, (next) => go(next, 'replace'));
   const { asked, fault, stale } = useAnswer(parsed.duty, props);
   const problems = stillWrong(shown, parsed);
-  const onLeave = () => setShown(parseDuty(form.current ? formTexts(form.current) : texts).problems);
+  useEffect(watchPointer, []);
+  const onLeave = () => afterPointer(() => setShown(parseDuty(form.current ? formTexts(form.current) : texts).problems));
   const onSubmit = (event: { preventDefault: () => void }) => {
     live.onSubmit(event);
     onLeave();

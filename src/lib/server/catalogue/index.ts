@@ -1,4 +1,4 @@
 export { toCandidateModel, type CatalogueEntry } from './entries';
 export { catalogueList, catalogueVendors, readCatalogueAddress } from './list';
-export { catalogueEntries } from './memory';
+export { catalogueEntries, forgetCatalogue } from './memory';
 export { approvedModelOf, moduleHistory, moduleShown } from './model';

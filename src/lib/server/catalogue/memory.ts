@@ -32,3 +32,8 @@ export async function catalogueEntries(): Promise<readonly CatalogueEntry[]> {
   });
   return entries;
 }
+
+/** Drops the copy: for a process that opens another database. */
+export const forgetCatalogue = (): void => {
+  held = undefined;
+};

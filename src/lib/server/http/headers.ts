@@ -22,6 +22,8 @@ export const headers: MiddlewareHandler = async ({ url, isPrerendered }, next) =
   if (!response.headers.has('Cache-Control')) set('Cache-Control', 'no-store');
   // Astro's own policy cannot name these two
   const policy = response.headers.get('Content-Security-Policy');
+  // a rewritten page has passed here once already
+  if (policy?.includes('frame-ancestors')) return response;
   const ours = "style-src-attr 'unsafe-inline'; frame-ancestors 'none';";
   set('Content-Security-Policy', policy ? `${policy} ${ours}` : ours);
   return response;
