@@ -36,3 +36,6 @@ export const printedDate = z
   .trim()
   .regex(/^(\d{4}(-(0[1-9]|1[0-2])(-\d{2})?)?)?$/, PRINTED_DATE)
   .refine(isCalendarDay, PRINTED_DATE);
+
+export const READING_STATES = ['draft', 'handed-in', 'returned', 'approved', 'superseded', 'withdrawn'] as const;
+export const readingState = z.enum(READING_STATES);

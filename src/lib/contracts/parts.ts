@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { idParams, instant, isoDate, line, printedDate, rowId, sha256 } from './common';
+import { idParams, instant, isoDate, line, printedDate, readingState, rowId, sha256 } from './common';
 
 const outOfRange = (what: string, unit: string, min: number, max: number) =>
   `${what} must be between ${min} and ${max} ${unit}.`.replace(' .', '.');
@@ -105,7 +105,7 @@ export const sheetView = sheetBody.extend({
   vendorId: rowId,
   pages: z.array(pageView),
   readings: z.array(
-    z.strictObject({ id: rowId, moduleId: rowId, module: z.string(), state: z.string(), ownerId: z.string(), owner: z.string() }),
+    z.strictObject({ id: rowId, moduleId: rowId, module: z.string(), state: readingState, ownerId: z.string(), owner: z.string() }),
   ),
   version: z.int(),
   createdAt: instant,

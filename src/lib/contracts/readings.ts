@@ -2,15 +2,12 @@ import { z } from 'zod';
 import { benchDocument } from '@/lib/editor';
 import type { ReadingResult } from '@/lib/reading';
 import { RATING_KEYS } from '@/lib/reading';
-import { instant, paragraph, rowId } from './common';
+import { instant, paragraph, readingState, rowId } from './common';
 import { moduleView, pageView } from './parts';
 
 const finite = z.number();
 const px = z.tuple([finite, finite]);
 const ratingKey = z.enum(RATING_KEYS);
-
-export const READING_STATES = ['draft', 'handed-in', 'returned', 'approved', 'superseded', 'withdrawn'] as const;
-export const readingState = z.enum(READING_STATES);
 
 const who = z.strictObject({ id: z.string(), name: z.string() });
 
