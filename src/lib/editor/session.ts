@@ -33,9 +33,9 @@ export type SessionAction =
   | { readonly type: 'tool'; readonly tool: Tool }
   | { readonly type: 'step'; readonly by: 1 | -1 };
 
-/** Before anything has been picked: the first station at the first chart. */
-export const startSession = (document: BenchDocument): Session =>
-  settle({ station: 'chart', chart: null, curve: null, selection: null, tool: 'select' }, document);
+/** Before anything has been picked: a station, the first unless another is named, at the first chart. */
+export const startSession = (document: BenchDocument, station: Station = 'chart'): Session =>
+  settle({ station, chart: null, curve: null, selection: null, tool: 'select' }, document);
 
 const picked = (selection: Selection | null, chart: BenchChart | null): Selection | null => {
   if (!selection || !chart) return null;

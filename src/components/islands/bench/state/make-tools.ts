@@ -22,7 +22,7 @@ const seams = (readingId: number, unsaved: UnsavedStore): SaverSeams => ({
 export function makeTools(reading: ReadingView, personId: string): BenchTools {
   const frozen = !reading.may.edit;
   const unsaved = unsavedStore(personId);
-  const store = createBenchStore(reading.document, frozen);
+  const store = createBenchStore(reading.document, frozen, reading.may.takeBack ? 'hand-in' : 'chart');
   const saver = new Saver(reading, seams(reading.id, unsaved));
   return {
     reading,

@@ -12,6 +12,7 @@ import {
   type HistoryAction,
   type Session,
   type SessionAction,
+  type Station,
 } from '@/lib/editor';
 
 /** What the bench shows: the draft with its history, and where the person is in it. */
@@ -40,8 +41,8 @@ const RUN_MS = 800;
 const reduce = historyReducer({ apply, label });
 
 /** A store over a draft. With `frozen` nothing in the draft changes, and the person still moves about in it. */
-export function createBenchStore(document: BenchDocument, frozen: boolean): BenchStore {
-  let state: BenchState = { history: startHistory(document), session: startSession(document) };
+export function createBenchStore(document: BenchDocument, frozen: boolean, station?: Station): BenchStore {
+  let state: BenchState = { history: startHistory(document), session: startSession(document, station) };
   let timer: ReturnType<typeof setTimeout> | undefined;
   const listeners = new Set<() => void>();
 
