@@ -1,5 +1,6 @@
 import { Chip } from '@/components/ui/Chip';
 import { gradeWords } from '@/components/ui/chip-tones';
+import { classes } from '@/components/ui/classes';
 import { nextSort, sortGlyph, type Sort } from '@/components/ui/sort';
 import { formatDate } from '@/components/when';
 import type { CatalogueRow, CatalogueSort } from '@/lib/contracts';
@@ -18,7 +19,11 @@ function Heading({ column, links: { sort, hrefOf, go } }: { column: Column; link
   const next = nextSort(sort, column.key, column.first);
   const changes = { sort: next.key, order: next.direction, page: undefined };
   return (
-    <th scope="col" className={column.numeric ? 'num' : undefined} aria-sort={sort.key === column.key ? sort.direction : undefined}>
+    <th
+      scope="col"
+      className={classes(column.numeric && 'num', column.wide && 'max-md:hidden')}
+      aria-sort={sort.key === column.key ? sort.direction : undefined}
+    >
       <a
         className="sort"
         href={hrefOf(changes)}
@@ -54,10 +59,16 @@ function Row({ row }: { row: CatalogueRow }) {
   const grade = gradeWords(row.grade);
   return (
     <tr>
-      <th scope="row" className="min-w-28">
+      <th scope="row" className="min-w-32">
         <a href={`/modules/${row.id}`}>{[row.partNumber, row.variant].filter(Boolean).join(' ')}</a>
+        <small className="block font-normal md:hidden">{row.vendor.name}</small>
       </th>
-      <td>{row.vendor.name}</td>
+      <td className="max-md:hidden">{row.vendor.name}</td>
+      {[row.qmax, row.dtmax, row.imax, row.vmax].map(({ value, u, unit }) => (
+        <td key={unit} className="num">
+          <Uncertain value={value} u={u} />
+        </td>
+      ))}
       <td className="num">
         <Plain value={row.stages} />
       </td>
@@ -70,11 +81,6 @@ function Row({ row }: { row: CatalogueRow }) {
       <td className="num">
         <Plain value={row.heightMm} decimals={1} />
       </td>
-      {[row.imax, row.vmax, row.qmax, row.dtmax].map(({ value, u, unit }) => (
-        <td key={unit} className="num">
-          <Uncertain value={value} u={u} />
-        </td>
-      ))}
       <td>
         <Chip tone={grade.tone}>{grade.text}</Chip>
       </td>

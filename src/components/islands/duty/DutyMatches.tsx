@@ -53,15 +53,15 @@ function Row({ match, best, chosen, search }: RowProps) {
           </small>
         ))}
       </th>
-      <td className="num">{current(match.current)}</td>
-      <td className="num">{number(match.voltageV)}</td>
-      <td className="num">{number(match.powerW)}</td>
       <td className="num">
         <Cop cop={cop} />
       </td>
-      <td>
+      <td className="max-sm:hidden">
         <CopBar share={cop === null || best === 0 ? 1 : cop.value / best} />
       </td>
+      <td className="num">{current(match.current)}</td>
+      <td className="num">{number(match.voltageV)}</td>
+      <td className="num">{number(match.powerW)}</td>
       <td className="num">+{number(match.reserveW)}</td>
       <td className="num">{number(match.heatRejectedW)}</td>
       <td className="num">{formatNumber(match.shareOfImax * 100, { decimals: 0 })}</td>
@@ -72,7 +72,7 @@ function Row({ match, best, chosen, search }: RowProps) {
   );
 }
 
-const HEADINGS = ['Current / A', 'Voltage / V', 'Power / W', 'COP'] as const;
+const HEADINGS = ['Current / A', 'Voltage / V', 'Power / W', 'Reserve / W', 'Heat rejected / W', 'of Imax / %'] as const;
 
 /** Modules that do the duty, best COP first. */
 export function DutyMatches({ matches, chosen, search }: { matches: readonly DutyMatchView[]; chosen: number | null; search: string }) {
@@ -87,21 +87,15 @@ export function DutyMatches({ matches, chosen, search }: { matches: readonly Dut
         <thead>
           <tr>
             <th scope="col">Module</th>
+            <th scope="col" className="num">
+              COP
+            </th>
+            <td className="max-sm:hidden" />
             {HEADINGS.map((heading) => (
               <th key={heading} scope="col" className="num">
                 {heading}
               </th>
             ))}
-            <td />
-            <th scope="col" className="num">
-              Reserve / W
-            </th>
-            <th scope="col" className="num">
-              Heat rejected / W
-            </th>
-            <th scope="col" className="num">
-              of Imax / %
-            </th>
             <th scope="col">Rests on</th>
           </tr>
         </thead>
