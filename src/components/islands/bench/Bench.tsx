@@ -8,7 +8,7 @@ import { KeyHelp } from './dialogs/KeyHelp';
 import { LostRace } from './dialogs/LostRace';
 import { UnsavedOffer } from './dialogs/UnsavedOffer';
 import { useModel } from './model/use-model';
-import { NUMBERS_ID } from './points/PlaceEditor';
+import { editNumbers } from './points/PlaceEditor';
 import { BenchBar } from './shell/BenchBar';
 import { BenchStage } from './stage/BenchStage';
 import type { FittedLine } from './stage/Layers';
@@ -75,7 +75,7 @@ function Desk() {
   const { toasts, show, close } = useToasts();
   const model = useModel(station === 'model' || station === 'hand-in');
   const fitted = useFitted(model.answer, station === 'model' && overlay.shown);
-  const requests = { help: () => setHelping(true), editNumbers: () => document.getElementById(NUMBERS_ID)?.focus() };
+  const requests = { help: () => setHelping(true), editNumbers };
   const over = station === 'model' && overlay.shown ? overlay.balance : null;
   return (
     <div className="bench" data-station={station}>

@@ -1,6 +1,6 @@
 import { useEffect, useRef, useState } from 'react';
+import { showState } from '@/components/islands/shared/state-chip';
 import { Button } from '@/components/ui/Button';
-import { chipClass, stateWords } from '@/components/ui/chip-tones';
 import { ErrorBoundary } from '@/components/ui/ErrorBoundary';
 import { TextField } from '@/components/ui/TextField';
 import { ACTIONS, decide, doneSentence, type DecisionAction, type Outcome, type Standing } from './decisions';
@@ -69,15 +69,6 @@ const Failure = ({ outcome }: { outcome: Extract<Outcome, { kind: 'lost' | 'fail
     )}
   </div>
 );
-
-/** The chip at the head of the page is drawn by the server; it says what is true now. */
-function showState(chip: string, state: Standing['state']): void {
-  const element = document.getElementById(chip)?.querySelector('.chip');
-  if (!element) return;
-  const { tone, text } = stateWords(state);
-  element.className = chipClass(tone);
-  element.textContent = text;
-}
 
 function useDecision({ standing, owner, chip }: DecisionPanelProps) {
   const [now, setNow] = useState(standing);

@@ -1,6 +1,14 @@
 import { findPictures, type PictureRecord, type ReadingRecord } from '@db';
 import { toReadingDocument, type BenchDocument, type Conversion } from '@/lib/editor';
-import { PictureRefused, readWithFit, ReadingRefused, type ReadingDocument, type ReadingModule, type ReadWithFit } from '@/lib/reading';
+import {
+  parseReadingDocument,
+  PictureRefused,
+  readWithFit,
+  ReadingRefused,
+  type ReadingDocument,
+  type ReadingModule,
+  type ReadWithFit,
+} from '@/lib/reading';
 import type { ModuleRecord } from '@db';
 import { wrongInput } from '../refusal';
 
@@ -59,7 +67,9 @@ export async function fitDraft(
   const { document } = conversion;
   if (!document) return { conversion, document, read: null, pixelsSha256: [] };
   const byName = new Map(pictures.map((picture) => [nameOf(picture.id), picture]));
-  const read = await readOrRefuse(document, byName);
+  const parsed = parseReadingDocument(document);
+  if (!parsed.ok) throw wrongInput({ [parsed.path]: parsed.message }, parsed.message);
+  const read = await readOrRefuse(parsed.document, byName);
   return { conversion, document, read, pixelsSha256: document.charts.map((chart) => byName.get(chart.image)?.pixelsSha256 ?? '') };
 }
 

@@ -10,7 +10,15 @@ import { useSession, useTools } from '../state/tools';
 import { axisHead } from './words';
 
 /** The id of the first field, which Enter on the picture leads to. */
-export const NUMBERS_ID = 'bench-numbers';
+const NUMBERS_ID = 'bench-numbers';
+
+/** Gives the keyboard to the numbers of what is picked out, ready to be typed over. */
+export const editNumbers = (): void => {
+  const field = document.getElementById(NUMBERS_ID);
+  if (!(field instanceof HTMLInputElement)) return;
+  field.focus();
+  field.select();
+};
 
 /** What is picked out, as numbers that can be typed over and as buttons for every key. */
 export function PlaceEditor({ chart }: { chart: BenchChart }) {

@@ -4,7 +4,7 @@ import type { Px } from '@/lib/geometry';
 import { formatNumber } from '@/lib/units';
 import { announceSelection, removeSelected } from '../state/actions';
 import { useSession, useTools } from '../state/tools';
-import { NUMBERS_ID } from './PlaceEditor';
+import { editNumbers } from './PlaceEditor';
 import { axisHead, valueTexts } from './words';
 
 /** Every point of the curve in hand beside the picture: one choice for both, walked by the arrow keys. */
@@ -144,7 +144,7 @@ const nextRow = ({ key, ctrlKey, altKey, metaKey }: KeyboardEvent, at: number, l
 const rowKey = (event: KeyboardEvent, tools: ReturnType<typeof useTools>): void => {
   if (event.ctrlKey || event.metaKey || event.altKey) return;
   if (event.key === 'Delete' || event.key === 'Backspace') removeSelected(tools);
-  else if (event.key === 'Enter' || event.key === 'F2') document.getElementById(NUMBERS_ID)?.focus();
+  else if (event.key === 'Enter' || event.key === 'F2') editNumbers();
   else if (event.key === 'Escape') tools.stage.focus();
   else return;
   event.preventDefault();

@@ -1,4 +1,5 @@
 import { ask } from '@/components/islands/api';
+import { showState } from '@/components/islands/shared/state-chip';
 import type { ReadingView, SaveAnswer } from '@/lib/contracts';
 import { StageView } from '../stage/stage-view';
 import { createAnnouncer } from './announcer';
@@ -8,8 +9,11 @@ import { pagesOf, type BenchTools } from './tools';
 import { unsavedStore, type UnsavedStore } from './unsaved';
 
 const seams = (readingId: number, unsaved: UnsavedStore): SaverSeams => ({
-  put: async (document, version) =>
-    (await ask<SaveAnswer>(`/api/readings/${readingId}`, { method: 'PUT', body: { document }, ifMatch: `"${version}"` })).data,
+  put: async (document, version) => {
+    const { data } = await ask<SaveAnswer>(`/api/readings/${readingId}`, { method: 'PUT', body: { document }, ifMatch: `"${version}"` });
+    showState(STATE_CHIP, 'draft'); // what was returned is a draft from its first change on
+    return data;
+  },
   keep: (document, version) => unsaved.keep({ readingId, version, document, at: new Date().toISOString() }),
   forget: () => unsaved.forget(readingId),
   after: (milliseconds, task) => {
@@ -17,6 +21,9 @@ const seams = (readingId: number, unsaved: UnsavedStore): SaverSeams => ({
     return () => clearTimeout(timer);
   },
 });
+
+/** Id of what holds the chip at the head of the page. */
+const STATE_CHIP = 'reading-state';
 
 /** Everything the bench works with, wired together. */
 export function makeTools(reading: ReadingView, personId: string): BenchTools {
