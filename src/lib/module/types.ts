@@ -1,6 +1,13 @@
 import type { Kelvin, Volt, Watt } from '@/lib/units';
 
-/** The three constants of a module: Seebeck coefficient in V/K, resistance in ohm, thermal conductance in W/K. */
+/** The forms of a model, each the next one's simpler case: fixed constants, constants shaped by the mean temperature, properties along the leg. */
+export const MODEL_FORMS = ['constant', 'shaped', 'leg'] as const;
+export type ModelForm = (typeof MODEL_FORMS)[number];
+
+/**
+ * The three constants of a module: Seebeck coefficient in V/K, resistance in ohm, thermal conductance in W/K. For the forms shaped and leg they
+ * are the values at 300.15 K.
+ */
 export interface ModuleConstants {
   readonly alpha: number;
   readonly R: number;
@@ -22,9 +29,24 @@ export interface ThermoelectricModule {
   heatRejected(I: number, Tc: Kelvin, Th: Kelvin): Watt;
   /** Heat absorbed over power; null where no power is taken up or the module generates. */
   cop(I: number, Tc: Kelvin, Th: Kelvin): number | null;
+  /** The current at a voltage (V), A; NaN where the module has none. */
+  currentAtVoltage(V: number, Tc: Kelvin, Th: Kelvin): number;
 }
 
-/** What a constant module reaches with its hot face held at one temperature. */
+/** Derivatives by α, R and K, in base units. */
+export type ByConstants = readonly [byAlpha: number, byR: number, byK: number];
+
+/** Heat (W) and voltage (V) at one state with their derivatives by the constants at a fixed current, and by the current. */
+export interface ModuleResponse {
+  readonly heat: number;
+  readonly voltage: number;
+  readonly heatBy: ByConstants;
+  readonly voltageBy: ByConstants;
+  readonly heatByCurrent: number;
+  readonly voltageByCurrent: number;
+}
+
+/** What a module reaches with its hot face held at one temperature. */
 export interface ModuleMaxima {
   /** Current of the largest temperature difference, A: the usual meaning of a printed Imax. */
   readonly imaxLargestDeltaT: number;
@@ -38,6 +60,6 @@ export interface ModuleMaxima {
   readonly dTmaxK: number;
   /** Voltage at the largest temperature difference, V. */
   readonly vmaxV: number;
-  /** Figure of merit α²/(RK), 1/K. */
+  /** Figure of merit α²/(RK), 1/K, at a mean temperature equal to that of the hot face. */
   readonly Z: number;
 }

@@ -6,3 +6,5 @@ export { largerCovariance, propagate, weakestCombination, type Propagated, type 
 export { findRoot, type RootOptions } from './root';
 export { minimise, type Minimum } from './minimise';
 export { mean, median, quantile, rms } from './statistics';
+export { spectralGrid, type SpectralGrid } from './chebyshev';
+export { solveInPlace } from './small-system';
