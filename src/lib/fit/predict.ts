@@ -1,8 +1,8 @@
-import { constantModule, maximaAtHotSide, type ModuleMaxima } from '@/lib/module';
+import { maximaOf, type ModelForm, type ModuleMaxima } from '@/lib/module';
 import { propagate, type Rows, type Vector } from '@/lib/numeric';
 import { celsius, kelvin, toKelvin } from '@/lib/units';
 import type { Triple } from './problem';
-import { constantsOf, type FittedConstants, type PredictedValue, type UncertainValue } from './types';
+import { constantsOf, moduleOfFit, type FittedConstants, type PredictedValue, type UncertainValue } from './types';
 
 /** Where a prediction is asked: absolute face temperatures in K and either current in A or voltage in V. */
 export type PredictionPoint = { readonly Tc: number; readonly Th: number } & (
@@ -33,7 +33,7 @@ export interface PredictionOptions {
 export function predict(fit: FittedConstants, at: PredictionPoint, { tolerancePercent }: PredictionOptions = {}): Prediction {
   const { heatW, voltageV } = fit.misfit ?? { heatW: null, voltageV: null };
   const covariance = withErrors(fit.covariance, heatW ?? 0, voltageV ?? 0);
-  const { values, u } = propagate((parameters) => stateAt(parameters, at), [...fit.parameters, 0, 0], covariance);
+  const { values, u } = propagate((parameters) => stateAt(parameters, at, fit.form), [...fit.parameters, 0, 0], covariance);
   const entry = (i: number): PredictedValue => ({
     value: values[i]!,
     uRead: u[i]!,
@@ -47,10 +47,10 @@ export function predict(fit: FittedConstants, at: PredictionPoint, { tolerancePe
 const POWER = 4;
 
 /** I, V, Qc, Qh, P and COP from α, R, K and the misfit of heat (W) and voltage (V). */
-function stateAt([alpha, R, K, heatError, voltageError]: Vector, at: PredictionPoint): Vector {
+function stateAt([alpha, R, K, heatError, voltageError]: Vector, at: PredictionPoint, form?: ModelForm): Vector {
   const [Tc, Th] = [kelvin(at.Tc), kelvin(at.Th)];
-  const module = constantModule({ alpha: alpha!, R: R!, K: K! });
-  const I = at.I ?? (at.V - alpha! * (Th - Tc) - voltageError!) / R!;
+  const module = moduleOfFit({ form, parameters: [alpha!, R!, K!] });
+  const I = at.I ?? module.currentAtVoltage(at.V - voltageError!, Tc, Th);
   const V = module.voltage(I, Tc, Th) + voltageError!;
   const Qc = module.heat(I, Tc, Th) + heatError!;
   const P = V * I;
@@ -76,13 +76,17 @@ const UNITS: Readonly<Record<keyof ModuleMaxima, string>> = {
 };
 
 /**
- * The maxima of a fitted module with its hot side held at `hotSideC` (°C), from the closed forms of `maximaAtHotSide`, with
+ * The maxima of a fitted module with its hot side held at `hotSideC` (°C), from `maximaOf`, with
  * standard uncertainties from the covariance of the constants. For comparison with printed ratings, without a verdict.
  */
 export function impliedRatings(fit: FittedConstants, hotSideC: number): ImpliedRatings {
   const names = Object.keys(UNITS) as (keyof ModuleMaxima)[];
   const maxima = (parameters: Vector) => {
-    const found = maximaAtHotSide(constantsOf({ parameters: parameters as unknown as Triple }), toKelvin(celsius(hotSideC)));
+    const found = maximaOf(
+      fit.form ?? 'constant',
+      constantsOf({ parameters: parameters as unknown as Triple }),
+      toKelvin(celsius(hotSideC)),
+    );
     return names.map((name) => found[name]);
   };
   const { values, u } = propagate(maxima, fit.parameters, fit.covariance);

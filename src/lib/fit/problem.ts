@@ -1,4 +1,4 @@
-import type { ModuleConstants } from '@/lib/module';
+import type { ModelForm, ModuleConstants } from '@/lib/module';
 import type { ModelValues, NonlinearProblem, Vector } from '@/lib/numeric';
 import { observe } from './observable';
 import { constantsOf, type Observation } from './types';
@@ -14,9 +14,10 @@ export const tripleOf = ({ alpha, R, K }: ModuleConstants): Triple => [alpha, R,
 export function problemOf(
   observations: readonly Observation[],
   floor: number,
+  form: ModelForm = 'constant',
 ): Omit<NonlinearProblem, 'start'> & { readonly weights: Vector } {
   return {
-    model: (parameters) => modelOf(constantsOf({ parameters: parameters as Triple }), observations),
+    model: (parameters) => modelOf(constantsOf({ parameters: parameters as Triple }), observations, form),
     y: observations.map(({ value }) => value),
     weights: weightsOf(observations, floor),
     clusters: observations.map(curveOf),
@@ -25,11 +26,16 @@ export function problemOf(
 }
 
 /** Answers and derivatives at every observation; null where one of them has no answer. */
-export function modelOf(constants: ModuleConstants, observations: readonly Observation[]): ModelValues | null {
+export function modelOf(
+  constants: ModuleConstants,
+  observations: readonly Observation[],
+  form: ModelForm = 'constant',
+): ModelValues | null {
+  if (form !== 'constant' && !(constants.alpha > 0 && constants.R > 0 && constants.K > 0)) return null;
   const values: number[] = [];
   const jacobian: Triple[] = [];
   for (const point of observations) {
-    const answer = observe(constants, point.answer, point);
+    const answer = observe(constants, point.answer, point, form);
     if (answer === null) return null;
     values.push(answer.value);
     jacobian.push(answer.gradient);

@@ -1,12 +1,17 @@
-import { maximaAtHotSide, type ModuleConstants } from '@/lib/module';
+import { maximaOf, responseOf, type ModelForm, type ModuleConstants } from '@/lib/module';
 import { mean, quantile, rms } from '@/lib/numeric';
 import { kelvin } from '@/lib/units';
 import { observe } from './observable';
-import type { Answer, ConstantFit, CurveResidual, Observation, PointResidual } from './types';
+import type { Answer, ModuleFit, CurveResidual, Observation, PointResidual } from './types';
 import { curveOf, sigmaOf } from './weights';
 
 /** Everything a fit tells about what it leaves. */
-export type Remainder = Pick<ConstantFit, 'residuals' | 'byCurve' | 'misfit' | 'rmsPercentOfQmax' | 'rmsPercentOfVmax'>;
+export type Remainder = Pick<ModuleFit, 'residuals' | 'byCurve' | 'misfit' | 'rmsPercentOfQmax' | 'rmsPercentOfVmax'>;
+
+interface Fitted {
+  readonly form: ModelForm;
+  readonly constants: ModuleConstants;
+}
 
 interface Left {
   readonly point: Observation;
@@ -14,12 +19,18 @@ interface Left {
 }
 
 /**
- * What the constants leave at every observation, omitted ones included, and along every curve. An observation at which
+ * What a form leaves at every observation, omitted ones included, and along every curve. An observation at which
  * the model has no answer (COP where no power is taken up) is left out.
  */
-export function remainderOf(constants: ModuleConstants, observations: readonly Observation[], floor: number): Remainder {
+export function remainderOf(
+  constants: ModuleConstants,
+  observations: readonly Observation[],
+  floor: number,
+  form: ModelForm = 'constant',
+): Remainder {
+  const fitted: Fitted = { form, constants };
   const left = observations.flatMap((point): Left[] => {
-    const answer = observe(constants, point.answer, point);
+    const answer = observe(constants, point.answer, point, form);
     return answer === null ? [] : [{ point, residual: point.value - answer.value }];
   });
   const counted = left.filter(({ point }) => point.omitted !== true);
@@ -28,11 +39,11 @@ export function remainderOf(constants: ModuleConstants, observations: readonly O
     residuals: left.map((one) => pointResidual(one, floor)),
     byCurve: byCurve(counted),
     misfit: {
-      heatW: rmsOrNull(counted.flatMap((one) => asHeat(one, constants))),
-      voltageV: rmsOrNull(counted.flatMap((one) => asVoltage(one, constants))),
+      heatW: rmsOrNull(counted.flatMap((one) => asHeat(one, fitted))),
+      voltageV: rmsOrNull(counted.flatMap((one) => asVoltage(one, fitted))),
     },
-    rmsPercentOfQmax: rmsOrNull(percentOfMaximum(answering('Qc', 'Qh'), constants, 'qmaxW')),
-    rmsPercentOfVmax: rmsOrNull(percentOfMaximum(answering('V'), constants, 'vmaxV')),
+    rmsPercentOfQmax: rmsOrNull(percentOfMaximum(answering('Qc', 'Qh'), fitted, 'qmaxW')),
+    rmsPercentOfVmax: rmsOrNull(percentOfMaximum(answering('V'), fitted, 'vmaxV')),
   };
 }
 
@@ -74,26 +85,26 @@ function byCurve(counted: readonly Left[]): readonly CurveResidual[] {
 }
 
 /** A residual as the heat in W that would explain it: as it is for heat, times the power for COP. */
-function asHeat({ point, residual }: Left, constants: ModuleConstants): readonly number[] {
+function asHeat({ point, residual }: Left, { form, constants }: Fitted): readonly number[] {
   if (point.answer === 'Qc' || point.answer === 'Qh') return [residual];
-  return point.answer === 'COP' ? [residual * observe(constants, 'P', point)!.value] : [];
+  return point.answer === 'COP' ? [residual * observe(constants, 'P', point, form)!.value] : [];
 }
 
-/** A residual as the voltage in V that would explain it: over the current for power, times the resistance for a current. */
-function asVoltage({ point, residual }: Left, constants: ModuleConstants): readonly number[] {
+/** A residual as the voltage in V that would explain it: over the current for power, times dV/dI for a current. */
+function asVoltage({ point, residual }: Left, { form, constants }: Fitted): readonly number[] {
   if (point.answer === 'V') return [residual];
-  if (point.answer === 'I') return [residual * constants.R];
-  const I = observe(constants, 'I', point)?.value ?? 0;
+  const I = observe(constants, 'I', point, form)?.value ?? 0;
+  if (point.answer === 'I') return [residual * (responseOf(form, constants, I, point.Tc, point.Th)?.voltageByCurrent ?? NaN)];
   return point.answer === 'P' && I !== 0 ? [residual / I] : [];
 }
 
 /** Residuals of some answers in percent of the model's maximum at their chart's side. */
-function percentOfMaximum(left: readonly Left[], constants: ModuleConstants, maximum: 'qmaxW' | 'vmaxV'): readonly number[] {
+function percentOfMaximum(left: readonly Left[], { form, constants }: Fitted, maximum: 'qmaxW' | 'vmaxV'): readonly number[] {
   const charts = new Map<number, number>();
   for (const { point } of left) {
     if (charts.has(point.chart)) continue;
     const side = heldSide(left.filter((other) => other.point.chart === point.chart).map((other) => other.point));
-    charts.set(point.chart, maximaAtHotSide(constants, kelvin(side))[maximum]);
+    charts.set(point.chart, maximaOf(form, constants, kelvin(side))[maximum]);
   }
   return left.map(({ point, residual }) => (100 * residual) / charts.get(point.chart)!);
 }

@@ -1,4 +1,4 @@
-import type { ModuleConstants } from '@/lib/module';
+import { moduleOfForm, type ModelForm, type ModuleConstants, type ThermoelectricModule } from '@/lib/module';
 
 /** What a chart can answer. */
 export type Answer = 'Qc' | 'Qh' | 'P' | 'COP' | 'V' | 'I';
@@ -51,16 +51,16 @@ export interface CurveResidual {
   readonly rmsPercentOfRange: number;
 }
 
-/** The three constants fitted to every chart of a reading; effective values over the sheet. */
-export interface ConstantFit {
-  readonly form: 'constant';
-  /** α in V/K, R in ohm, K in W/K. */
+/** A form of the model fitted to every chart of a reading. */
+export interface ModuleFit {
+  readonly form: ModelForm;
+  /** α in V/K, R in ohm, K in W/K: effective values over the sheet for the form constant, values at 300.15 K for the others. */
   readonly parameters: readonly [alpha: number, R: number, K: number];
   /** Covariance of the parameters, in their order: by curve or by information, whichever is larger. Errors shared by a chart (its marks) are not in it. */
   readonly covariance: readonly (readonly number[])[];
   readonly rank: number;
   readonly condition: number;
-  /** Steps of Gauss-Newton; 0 where the charts are linear in the parameters. */
+  /** Steps of Gauss-Newton; for the constant form 0 where the charts are linear in the parameters. */
   readonly iterations: number;
   readonly converged: boolean;
   readonly why: string;
@@ -74,13 +74,16 @@ export interface ConstantFit {
   readonly rmsPercentOfVmax: number | null;
 }
 
+/** A fit of the constant form. */
+export type ConstantFit = ModuleFit & { readonly form: 'constant' };
+
 /** A fit, or one sentence on what is missing; then there are no parameters. */
-export type FitOutcome =
-  | { readonly ok: true; readonly fit: ConstantFit }
+export type FitOutcome<F extends ModuleFit = ModuleFit> =
+  | { readonly ok: true; readonly fit: F }
   | { readonly ok: false; readonly missing: string; readonly rank: number; readonly condition: number };
 
-/** Constants with their covariance: all that predictions need; a {@link ConstantFit} is one. */
-export type FittedConstants = Pick<ConstantFit, 'parameters' | 'covariance'> & Partial<Pick<ConstantFit, 'misfit'>>;
+/** A form with its constants and their covariance: all that predictions need; a {@link ModuleFit} is one. Constant where no form is named. */
+export type FittedConstants = Pick<ModuleFit, 'parameters' | 'covariance'> & Partial<Pick<ModuleFit, 'form' | 'misfit'>>;
 
 /** One value with how well it was read and what a delivered module may differ. */
 export interface PredictedValue {
@@ -99,4 +102,8 @@ export interface UncertainValue {
 }
 
 /** The constants by name. */
-export const constantsOf = ({ parameters: [alpha, R, K] }: Pick<ConstantFit, 'parameters'>): ModuleConstants => ({ alpha, R, K });
+export const constantsOf = ({ parameters: [alpha, R, K] }: Pick<ModuleFit, 'parameters'>): ModuleConstants => ({ alpha, R, K });
+
+/** The fitted module. */
+export const moduleOfFit = (fit: Pick<FittedConstants, 'form' | 'parameters'>): ThermoelectricModule =>
+  moduleOfForm(fit.form ?? 'constant', constantsOf(fit));

@@ -1,6 +1,6 @@
 import type { Answer } from '@/lib/fit';
 import { toValue, type Frame, type Px } from '@/lib/geometry';
-import { constantModule, type ModuleConstants } from '@/lib/module';
+import type { ThermoelectricModule } from '@/lib/module';
 import { kelvin } from '@/lib/units';
 import type { ReadingChart, ReadingModule } from './document';
 import { rolesOf, type ChartRoles, type Place } from './roles';
@@ -47,11 +47,10 @@ export function stateAt(values: ChartValues, frame: Frame, family: number, px: P
   return stateOf(values, { x, y, family });
 }
 
-/** What the constants answer at a state, base units; null where COP is not defined. */
-export function modelAnswer(constants: ModuleConstants, answer: Answer, state: Omit<State, 'value'>): number | null {
-  const module = constantModule(constants);
+/** What a module answers at a state, base units; null where COP is not defined. */
+export function modelAnswer(module: ThermoelectricModule, answer: Answer, state: Omit<State, 'value'>): number | null {
   const [Tc, Th] = [kelvin(state.Tc), kelvin(state.Th)];
-  const I = state.I ?? ((state.V ?? NaN) - constants.alpha * (Th - Tc)) / constants.R;
+  const I = state.I ?? module.currentAtVoltage(state.V ?? NaN, Tc, Th);
   switch (answer) {
     case 'Qc':
       return module.heat(I, Tc, Th);

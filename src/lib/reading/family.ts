@@ -1,6 +1,6 @@
-import { constantsOf, type ConstantFit } from '@/lib/fit';
+import { moduleOfFit, type ModuleFit } from '@/lib/fit';
 import { toPixel, toValue, type Frame, type Px, type Scale } from '@/lib/geometry';
-import type { ModuleConstants } from '@/lib/module';
+import type { ThermoelectricModule } from '@/lib/module';
 import { findRoot } from '@/lib/numeric';
 import { chartValues, modelAnswer, stateOf, type ChartValues } from './chart-values';
 import type { ReadingChart, ReadingCurve, ReadingDocument } from './document';
@@ -25,7 +25,7 @@ interface Drawn {
   readonly values: ChartValues;
   readonly frame: Frame;
   readonly curve: ReadingCurve;
-  readonly constants: ModuleConstants;
+  readonly module: ThermoelectricModule;
   readonly y: Range;
 }
 
@@ -44,17 +44,17 @@ function reach(chart: ReadingChart, frame: Frame, axis: 'x' | 'y'): Range {
   );
 }
 
-const gapAt = ({ values, curve, constants }: Drawn, x: number, y: number): number => {
+const gapAt = ({ values, curve, module }: Drawn, x: number, y: number): number => {
   const state = stateOf(values, { x, y, family: curve.value });
-  return (modelAnswer(constants, values.roles.answer.quantity, state) ?? NaN) - state.value;
+  return (modelAnswer(module, values.roles.answer.quantity, state) ?? NaN) - state.value;
 };
 
 /** Where y is the answer the model gives it; otherwise every y on the axis at which model and chart agree. */
 function valuesOfY(drawn: Drawn, x: number): number[] {
-  const { values, curve, constants, frame, y } = drawn;
+  const { values, curve, module, frame, y } = drawn;
   const { quantity, place } = values.roles.answer;
   if (place === 'y') {
-    const model = modelAnswer(constants, quantity, stateOf(values, { x, y: 0, family: curve.value }));
+    const model = modelAnswer(module, quantity, stateOf(values, { x, y: 0, family: curve.value }));
     return model === null ? [] : [values.conversions.y.fromBase(model)];
   }
   const rows = shares(ROWS, OVERSHOOT).map((share) => between(y, share, frame.scales.y));
@@ -98,15 +98,15 @@ function stretchesOf(drawn: Drawn, x: Range): Px[][] {
  * The fitted model drawn back over the pictures: for every curve of every chart the line that the model gives for its value, as pixels in the order
  * of x, over the whole x axis as far as marks and points reach and the line stays on the y axis. `frames` are those of the charts in order.
  */
-export function familyCurves(document: ReadingDocument, frames: readonly Frame[], fit: ConstantFit): FamilyCurve[] {
-  const constants = constantsOf(fit);
+export function familyCurves(document: ReadingDocument, frames: readonly Frame[], fit: ModuleFit): FamilyCurve[] {
+  const module = moduleOfFit(fit);
   return document.charts.flatMap((chart, number) => {
     const frame = frames[number];
     if (!frame) return [];
     const values = chartValues(chart, document.module);
     const [x, y] = [reach(chart, frame, 'x'), reach(chart, frame, 'y')];
     return (chart.curves ?? []).flatMap((curve, at) =>
-      stretchesOf({ values, frame, curve, constants, y }, x).map((points) => ({ chart: number, curve: at, value: curve.value, points })),
+      stretchesOf({ values, frame, curve, module, y }, x).map((points) => ({ chart: number, curve: at, value: curve.value, points })),
     );
   });
 }

@@ -15,7 +15,7 @@ export { familyCurves, type FamilyCurve } from './family';
 export { fitReading, type FittedReading } from './fit-reading';
 export { framesOf, marksOf, type FramesOutcome } from './frames';
 export { hashMaterial, type HashMaterial } from './hash-material';
-export { toleranceOf } from './model';
+export { constantsOfModel, moduleOf, toleranceOf } from './model';
 export { observationsOf, POINT_UNCERTAINTY_PX, type Observations } from './observations';
 export { parseReadingDocument, type ParsedDocument } from './parse';
 export { QUANTITIES, RATING_KEYS, UNITS, type RatingKey } from './quantities';

@@ -1,4 +1,4 @@
-import { fitConstant, type Observation } from '@/lib/fit';
+import { gainOf, type ModuleFit, type Observation } from '@/lib/fit';
 import { frameVariations, type Frame } from '@/lib/geometry';
 import { chartValues, stateAt } from './chart-values';
 import type { ReadingDocument } from './document';
@@ -30,28 +30,21 @@ function readWith(frame: Frame, chart: number, document: ReadingDocument, observ
   });
 }
 
-const parametersOf = (observations: readonly Observation[]) => {
-  const outcome = fitConstant(observations);
-  return outcome.ok ? outcome.fit.parameters : null;
-};
-
 /**
  * Covariance of α, R, K that comes from the marks. They are shared by all points of a chart, so no weighting of points can show it: every frame is
- * moved by one standard uncertainty along each of its independent directions and the model fitted anew; the products of the changes add up
- * (JCGM 100:2008, eq. 13, the derivatives taken as finite changes as in its 5.1.3, note 2). `observations` are those of `frames`.
+ * moved by one standard uncertainty along each of its independent directions, and what the fit makes of the points then read follows from its linear
+ * response to them (see `gainOf`); the products of the changes add up (JCGM 100:2008, eq. 13). `observations` are those of `frames`.
  */
 export function covarianceFromMarks(
   document: ReadingDocument,
   frames: readonly Frame[],
   observations: readonly Observation[],
+  fit: ModuleFit,
 ): readonly (readonly number[])[] {
   const few = thinned(observations);
-  const middle = parametersOf(few);
+  const gain = gainOf(fit, few);
   const changes = frames.flatMap((frame, chart) =>
-    frameVariations(frame).flatMap((variation) => {
-      const moved = middle && parametersOf(readWith(variation, chart, document, few));
-      return moved ? [moved.map((value, at) => value - (middle?.[at] ?? 0))] : [];
-    }),
+    frameVariations(frame).flatMap((variation) => (gain ? [gain.changeBy(readWith(variation, chart, document, few))] : [])),
   );
   return [0, 1, 2].map((i) => [0, 1, 2].map((j) => changes.reduce((sum, change) => sum + (change[i] ?? 0) * (change[j] ?? 0), 0)));
 }

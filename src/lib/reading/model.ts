@@ -1,10 +1,11 @@
-import { constantsOf, impliedRatings, type ConstantFit, type Observation } from '@/lib/fit';
+import { impliedRatings, moduleOfFit, type FormChoice, type ModuleFit, type Observation } from '@/lib/fit';
+import { moduleOfForm, temperatureCoefficients, type ModuleConstants, type ThermoelectricModule } from '@/lib/module';
 import { kelvin, toCelsius } from '@/lib/units';
 import type { ReadingDocument, ReadingModule } from './document';
 import type { DerivedRatings, ReadingModel, Validity } from './result';
 import { tidyAll } from './tidy';
 
-/** A model of constants is believed this far on either side of the hot sides of its charts, K (a choice, no source). */
+/** A model is believed this far on either side of the hot sides of its charts, K (a choice, no source). */
 const HOT_SIDE_MARGIN_K = 10;
 
 const rangeOf = (values: readonly number[]): [number, number] =>
@@ -20,9 +21,9 @@ function fromZero(values: readonly number[]): [number, number] {
 }
 
 /** The ranges that the curves cover; current and difference reach down to zero, hot sides a margin further. */
-function validityOf(fit: ConstantFit, observations: readonly Observation[]): Validity {
-  const { alpha, R } = constantsOf(fit);
-  const currentAt = ({ I, V, Tc, Th }: Observation) => I ?? ((V ?? NaN) - alpha * (Th - Tc)) / R;
+function validityOf(fit: ModuleFit, observations: readonly Observation[]): Validity {
+  const module = moduleOfFit(fit);
+  const currentAt = ({ I, V, Tc, Th }: Observation) => I ?? module.currentAtVoltage(V ?? NaN, kelvin(Tc), kelvin(Th));
   const [coldest, warmest] = rangeOf(observations.map(({ Th }) => toCelsius(kelvin(Th))));
   return {
     I: fromZero(observations.map(currentAt)),
@@ -37,7 +38,7 @@ function hotSidesOf({ charts, module }: ReadingDocument): number[] {
   return [...new Set(named)].sort((a, b) => a - b);
 }
 
-function derivedAt(fit: ConstantFit, hotSideC: number): DerivedRatings {
+function derivedAt(fit: ModuleFit, hotSideC: number): DerivedRatings {
   const { imaxLargestDeltaT, imaxMostHeat, qmaxW, dTmaxK, vmaxV, Z } = impliedRatings(fit, hotSideC);
   return { hotSideC, imaxLargestDeltaT, imaxMostHeat, qmaxW, dTmaxK, vmaxV, Z };
 }
@@ -48,6 +49,7 @@ export function toleranceOf({ rated }: ReadingModule): number | null {
   return stated.length === 0 ? null : Math.max(...stated);
 }
 
+/** What the parameters of every form are: for shaped and leg the published shapes times these, which are α, R and K at 300.15 K themselves. */
 const NAMES = [
   { name: 'alpha', unit: 'V/K' },
   { name: 'R', unit: 'ohm' },
@@ -55,16 +57,21 @@ const NAMES = [
 ] as const;
 
 /** The model of a reading as the result document has it. */
-export function describeModel(document: ReadingDocument, fit: ConstantFit, observations: readonly Observation[]): ReadingModel {
+export function describeModel(
+  document: ReadingDocument,
+  fit: ModuleFit,
+  observations: readonly Observation[],
+  choice: FormChoice | null,
+): ReadingModel {
   const entry = (at: 0 | 1 | 2) => ({ value: fit.parameters[at], u: Math.sqrt(fit.covariance[at]?.[at] ?? NaN), unit: NAMES[at].unit });
   return tidyAll<ReadingModel>({
-    form: 'constant',
+    form: fit.form,
     grade: 'curves',
-    at: 'effective',
+    at: fit.form === 'constant' ? 'effective' : '300.15 K',
     alpha: entry(0),
     R: entry(1),
     K: entry(2),
-    temperature: { alphaPerK: 0, RPerK: 0, KPerK: 0 },
+    temperature: temperatureCoefficients(fit.form),
     parameters: NAMES.map(({ name, unit }, at) => ({ name, value: fit.parameters[at] ?? NaN, unit })),
     covariance: fit.covariance,
     rmsPercentOfQmax: fit.rmsPercentOfQmax,
@@ -72,5 +79,17 @@ export function describeModel(document: ReadingDocument, fit: ConstantFit, obser
     tolerancePercent: toleranceOf(document.module),
     validity: validityOf(fit, observations),
     derived: hotSidesOf(document).map((hotSideC) => derivedAt(fit, hotSideC)),
+    ...(choice && { choice }),
   });
 }
+
+/** The module that a model describes, whatever its form: the door for everyone who asks a model for heat, voltage or COP. */
+export const moduleOf = (model: Pick<ReadingModel, 'form' | 'alpha' | 'R' | 'K'>): ThermoelectricModule =>
+  moduleOfForm(model.form, constantsOfModel(model));
+
+/** α, R and K of a model: effective ones for the constant form, else those at 300.15 K. */
+export const constantsOfModel = ({ alpha, R, K }: Pick<ReadingModel, 'alpha' | 'R' | 'K'>): ModuleConstants => ({
+  alpha: alpha.value,
+  R: R.value,
+  K: K.value,
+});

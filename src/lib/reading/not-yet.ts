@@ -22,12 +22,6 @@ function ofChart(chart: ReadingChart, path: string): Refusal | null {
 
 /** The first thing a valid document asks that this version cannot do yet; null when it can do everything. */
 export function notYet({ charts, model }: ReadingDocument): Refusal | null {
-  if (model?.form === 'shaped' || model?.form === 'leg') {
-    return {
-      path: 'model.form',
-      message: `This version fits the constant form only, not ${model.form}: set form to "auto" or "constant".`,
-    };
-  }
   const other = model?.use?.findIndex((use) => use !== 'curves') ?? -1;
   if (other >= 0) {
     return { path: `model.use[${other}]`, message: `This version fits curves only, not ${model?.use?.[other]}: set use to ["curves"].` };

@@ -1,6 +1,6 @@
 import type { Observation } from '@/lib/fit';
 import { isVisible, toValue, type Frame, type Px } from '@/lib/geometry';
-import type { ModuleConstants } from '@/lib/module';
+import type { ThermoelectricModule } from '@/lib/module';
 import { chartValues, modelAnswer, stateAt, type ChartValues, type State } from './chart-values';
 import type { ReadingChart, ReadingCurve, ReadingDocument } from './document';
 import type { Refusal } from './refused';
@@ -21,10 +21,10 @@ interface CurveInChart {
 }
 
 /** By how much model and answer drift apart when the point moves by one pixel; without a model, by how much the answer moves. */
-function changePerPixel({ values, frame, curve }: CurveInChart, px: Px, constants: ModuleConstants | null): number | null {
+function changePerPixel({ values, frame, curve }: CurveInChart, px: Px, module: ThermoelectricModule | null): number | null {
   const gap = (dx: number, dy: number) => {
     const state = stateAt(values, frame, curve.value, [px[0] + dx, px[1] + dy]);
-    const model = constants ? modelAnswer(constants, values.roles.answer.quantity, state) : 0;
+    const model = module ? modelAnswer(module, values.roles.answer.quantity, state) : 0;
     return model === null ? NaN : state.value - model;
   };
   const change = Math.hypot(gap(0.5, 0) - gap(-0.5, 0), gap(0, 0.5) - gap(0, -0.5));
@@ -35,8 +35,8 @@ function changePerPixel({ values, frame, curve }: CurveInChart, px: Px, constant
  * Standard uncertainty of the answer at a point, base units: the uncertainty of its pixel, taken along both axes at once through the model
  * (effective variance: the error of the given quantity counts by the slope of the answer over it). That of the marks is common to the chart and is not in here.
  */
-function uncertaintyAt(place: CurveInChart, px: Px, constants: ModuleConstants | null): number {
-  const perPixel = changePerPixel(place, px, constants) ?? changePerPixel(place, px, null) ?? 0;
+function uncertaintyAt(place: CurveInChart, px: Px, module: ThermoelectricModule | null): number {
+  const perPixel = changePerPixel(place, px, module) ?? changePerPixel(place, px, null) ?? 0;
   return POINT_UNCERTAINTY_PX[place.curve.by ?? 'hand'] * perPixel;
 }
 
@@ -71,7 +71,7 @@ function impossible(state: State): string | null {
 const BEYOND = 'This point lies beyond the horizon of the perspective: check the marks.';
 
 /** What the points of one chart say, and the impossible ones. */
-function observeChart(document: ReadingDocument, chart: number, frame: Frame, constants: ModuleConstants | null): Observations {
+function observeChart(document: ReadingDocument, chart: number, frame: Frame, module: ThermoelectricModule | null): Observations {
   const shown = document.charts[chart]!;
   const values = chartValues(shown, document.module);
   const answer = values.roles.answer.quantity;
@@ -83,8 +83,7 @@ function observeChart(document: ReadingDocument, chart: number, frame: Frame, co
       const state = stateAt(values, frame, curve.value, px);
       const message = isVisible(frame, px) ? impossible(state) : BEYOND;
       if (message) problems.push({ path: `charts[${chart}].curves[${at}].points[${point}]`, message });
-      else
-        observations.push({ chart, curve: at, point, ...state, answer, u: uncertaintyAt({ values, frame, curve }, px, constants), range });
+      else observations.push({ chart, curve: at, point, ...state, answer, u: uncertaintyAt({ values, frame, curve }, px, module), range });
     }
   }
   return { observations, problems };
@@ -92,14 +91,14 @@ function observeChart(document: ReadingDocument, chart: number, frame: Frame, co
 
 /**
  * What every point of every curve says about the module, in base units, for the fit. `frames` are those of the charts in order.
- * With `constants` the uncertainties take both axes through that model; without, that of the answer's own axis alone.
+ * With `module` the uncertainties take both axes through that model; without, that of the answer's own axis alone.
  * A point that says something impossible is left out and named among the problems.
  */
 export function observationsOf(
   document: ReadingDocument,
   frames: readonly Frame[],
-  constants: ModuleConstants | null = null,
+  module: ThermoelectricModule | null = null,
 ): Observations {
-  const charts = frames.slice(0, document.charts.length).map((frame, chart) => observeChart(document, chart, frame, constants));
+  const charts = frames.slice(0, document.charts.length).map((frame, chart) => observeChart(document, chart, frame, module));
   return { observations: charts.flatMap((chart) => chart.observations), problems: charts.flatMap((chart) => chart.problems) };
 }

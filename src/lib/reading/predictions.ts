@@ -1,4 +1,4 @@
-import { predict, type ConstantFit, type PredictedValue, type PredictionPoint } from '@/lib/fit';
+import { predict, type ModuleFit, type PredictedValue, type PredictionPoint } from '@/lib/fit';
 import { celsius, kelvin, toCelsius, toKelvin } from '@/lib/units';
 import type { ReadingPrediction } from './document';
 import type { ReadingModel, ReadPrediction, Validity } from './result';
@@ -28,7 +28,7 @@ function askedOf({ hotSideC, coldSideC, deltaT, I, V }: ReadingPrediction) {
 const orNone = (cop: PredictedValue | null) => (cop && Number.isFinite(cop.value) && Number.isFinite(cop.uRead) ? cop : null);
 
 /** One prediction from a fitted model: of I and V the one asked stays a number, the other is an answer. */
-export function predictionOf(asked: ReadingPrediction, fit: ConstantFit, model: ReadingModel): ReadPrediction {
+export function predictionOf(asked: ReadingPrediction, fit: ModuleFit, model: ReadingModel): ReadPrediction {
   const point = pointOf(asked);
   const { I, V, Qc, Qh, P, COP } = tidyAll(predict(fit, point, { tolerancePercent: model.tolerancePercent }));
   const electrical = asked.I === undefined ? { I, V: asked.V ?? NaN } : { I: asked.I, V };

@@ -1,4 +1,4 @@
-import type { ConstantFit, Observation } from '@/lib/fit';
+import type { ModuleFit, Observation } from '@/lib/fit';
 import { toValue, type Frame, type Px } from '@/lib/geometry';
 import type { ReadingChart, ReadingDocument } from './document';
 import { fitReading } from './fit-reading';
@@ -30,7 +30,7 @@ export interface ReadingHost {
 /** A result with the fit behind it; indices of observations and residuals are those of the document's charts, curves and points. */
 export interface ReadWithFit {
   readonly result: ReadingResult;
-  readonly fit: ConstantFit | null;
+  readonly fit: ModuleFit | null;
   readonly observations: readonly Observation[];
   readonly frames: readonly Frame[];
 }
@@ -113,9 +113,9 @@ export async function readWithFit(document: ReadingDocument, host: ReadingHost):
   const [problem] = observationsOf(document, frames).problems;
   if (problem) return refuse(problem);
 
-  const { outcome, observations } = fitReading(document, frames);
+  const { outcome, observations, choice } = fitReading(document, frames);
   const fit = outcome.ok ? outcome.fit : null;
-  const model = fit && describeModel(document, fit, observations);
+  const model = fit && describeModel(document, fit, observations, choice);
   const modelMissing = outcome.ok ? null : outcome.missing;
   const result: ReadingResult = {
     format: 'couplet.result',

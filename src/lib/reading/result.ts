@@ -1,9 +1,10 @@
-import type { PredictedValue, UncertainValue } from '@/lib/fit';
+import type { FormChoice, PredictedValue, UncertainValue } from '@/lib/fit';
 import type { FrameKind, Px } from '@/lib/geometry';
+import type { ModelForm } from '@/lib/module';
 import type { ReadingMark, ReadingPrediction } from './document';
 
 /** Version of the program that reads; it is part of the result and of the approval hash. */
-export const ENGINE = '1.0.0';
+export const ENGINE = '1.1.0';
 
 /** One point of a curve: its pixel and its values in the chart's own units and normalisation. */
 export interface ReadPoint {
@@ -69,8 +70,9 @@ export interface DerivedRatings {
 
 /** The model of a module: α, R, K between the outer faces with their uncertainty, and how far they hold. */
 export interface ReadingModel {
-  readonly form: 'constant';
+  readonly form: ModelForm;
   readonly grade: 'curves' | 'ratings';
+  /** `effective` over the sheet for the constant form, 300.15 K mean for the others. */
   readonly at: 'effective' | '300.15 K';
   readonly alpha: UncertainValue;
   readonly R: UncertainValue;
@@ -86,6 +88,8 @@ export interface ReadingModel {
   readonly tolerancePercent: number | null;
   readonly validity: Validity;
   readonly derived: readonly DerivedRatings[];
+  /** How the form was chosen, with the numbers that spoke; only where the document leaves the choice to the program (`auto`). Since engine 1.1.0. */
+  readonly choice?: FormChoice;
 }
 
 type Asked = Omit<ReadingPrediction, 'I' | 'V' | 'note'>;

@@ -135,7 +135,7 @@ describe('the uncertainty of an observation', () => {
   });
 
   it('takes the other axis by the slope of the model', () => {
-    for (const { u, I } of observationsOf(document, frames, KNOWN).observations) {
+    for (const { u, I } of observationsOf(document, frames, known).observations) {
       // ∂Qc/∂ΔT at a held hot side: −α I − K
       const slope = -KNOWN.alpha * I! - KNOWN.K;
       expect(u).toBeCloseTo(0.5 * Math.hypot(perPixelUp, slope * perPixelAlong), 9);
@@ -235,7 +235,7 @@ describe('the fit of a reading', () => {
       if (!outcome.ok) throw new Error(outcome.missing);
       return outcome.fit;
     };
-    const parametersOf = (of: ReadingDocument) => fitted(fitConstant(observationsOf(of, framed(of), KNOWN).observations)).parameters;
+    const parametersOf = (of: ReadingDocument) => fitted(fitConstant(observationsOf(of, framed(of), known).observations)).parameters;
     const drawn = Array.from({ length: 400 }, () => parametersOf(again()));
     const { covariance } = fitted(fitReading(document, framed(document)).outcome);
     for (const at of [0, 1, 2] as const) {

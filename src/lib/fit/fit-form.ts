@@ -1,15 +1,18 @@
-import { gaussNewton, largerCovariance, solveLeastSquares, weakestCombination } from '@/lib/numeric';
+import { lumpedAt, type ModelForm, type ModuleConstants } from '@/lib/module';
+import { gaussNewton, largerCovariance, mean, solveLeastSquares, weakestCombination } from '@/lib/numeric';
 import type { LinearFit, NonlinearFit, SolvedFit, Vector } from '@/lib/numeric';
 import { checkObservations } from './check';
 import { gapOf, tooLittle } from './missing';
 import { modelOf, problemOf, tripleOf, type Triple } from './problem';
 import { remainderOf } from './residuals';
 import { startConstants } from './start';
-import { constantsOf, type FitOutcome, type Observation } from './types';
+import { constantsOf, type ConstantFit, type FitOutcome, type Observation } from './types';
 import { MISFIT_FLOOR } from './weights';
 
 /** How a fit may differ from the usual one. */
 export interface FitOptions {
+  /** Where to begin, for a form of which nearly the same fit is known. */
+  readonly start?: ModuleConstants | undefined;
   /** Share of the axis range granted to every point beside its reading uncertainty; 0.005 when left out. */
   readonly misfitFloor?: number | undefined;
 }
@@ -25,8 +28,9 @@ const UNANSWERABLE = `No module can show all of these points: ${CHECK}`;
 const UNSETTLED = `The fit did not settle on one answer: ${CHECK}`;
 
 /**
- * Fits α (V/K), R (ohm) and K (W/K) to all charts of a reading together. Heat, power and voltage at a given current are
- * linear in them and solved at once; COP, current and anything at a given voltage go on by Gauss-Newton.
+ * Fits a form of the model, α (V/K), R (ohm) and K (W/K), to all charts of a reading together. For the constant form heat, power and voltage
+ * at a given current are linear in them and solved at once; everything else goes on by Gauss-Newton, the forms shaped and leg from the
+ * constants that fit best, taken back to 300.15 K.
  *
  * Weights are 1/(u² + (floor · axis range)²), those of one curve together at most those of fifteen points. The covariance is
  * that of the weights, (XᵀWX)⁻¹, or the sandwich by curve of K.-Y. Liang and S. L. Zeger (see `solveLeastSquares`), in every
@@ -37,33 +41,63 @@ const UNSETTLED = `The fit did not settle on one answer: ${CHECK}`;
  * iteration does not settle, the outcome is one sentence and no number. Throws a RangeError for what is no observation:
  * not finite, without range, or with both or neither of I and V.
  */
-export function fitConstant(observations: readonly Observation[], { misfitFloor = MISFIT_FLOOR }: FitOptions = {}): FitOutcome {
+export function fitForm(form: ModelForm, observations: readonly Observation[], options: FitOptions = {}): FitOutcome {
   checkObservations(observations);
+  const { misfitFloor = MISFIT_FLOOR } = options;
   const used = observations.filter(({ omitted }) => omitted !== true);
   if (used.length < 3) return refuse(gapOf(used) ?? TOO_FEW, null);
-  const problem = problemOf(used, misfitFloor);
-  const start = startConstants(used, problem.weights);
-  if (start === null) return refuse(UNANSWERABLE, null);
-  const first = solveLeastSquares({ ...problem, rows: modelOf(start, used)!.jacobian });
-  const gap = gapOf(used);
-  if (gap !== null) return refuse(gap, first);
-  if (first.status !== 'solved') return refuse(tooLittle(used, relativeTo(tripleOf(start), first.weakest)), first);
+  const problem = problemOf(used, misfitFloor, form);
+  const begun = options.start ?? startFor(used, problem.weights);
+  if ('ok' in begun) return begun;
+  const start = options.start ?? atReference(form, begun, used);
+  if (form !== 'constant' && !Object.values(start).every((value) => value > 0)) return fitForm('constant', observations);
   const solution = gaussNewton({ ...problem, start: tripleOf(start) });
   const refusal = refusalOf(solution, used);
   return (
     refusal ?? {
       ok: true,
-      fit: { ...describe(solution), ...remainderOf(constantsAt(solution), observations, misfitFloor) },
+      fit: { ...describe(form, solution), ...remainderOf(constantsAt(solution), observations, misfitFloor, form) },
     }
   );
 }
+
+/** Constants that fit nearly, or why there are none: a chart that is missing, or points that no constants answer. */
+function startFor(used: readonly Observation[], weights: Vector): ModuleConstants | Refused {
+  const start = startConstants(used, weights);
+  if (start === null) return refuse(UNANSWERABLE, null);
+  const problem = { ...problemOf(used, MISFIT_FLOOR), weights };
+  const first = solveLeastSquares({ ...problem, clusters: undefined, rows: modelOf(start, used)!.jacobian });
+  const gap = gapOf(used);
+  if (gap !== null) return refuse(gap, first);
+  return first.status === 'solved' ? start : refuse(tooLittle(used, relativeTo(tripleOf(start), first.weakest)), first);
+}
+
+/** Constants effective over the sheet as those of a form at 300.15 K: taken back from the mean temperature of all points. */
+function atReference(form: ModelForm, constants: ModuleConstants, used: readonly Observation[]): ModuleConstants {
+  const middle = mean(used.map(({ Tc, Th }) => (Tc + Th) / 2));
+  const shape = lumpedAt(form, { alpha: 1, R: 1, K: 1 }, middle, middle);
+  return { alpha: constants.alpha / shape.alpha, R: constants.R / shape.R, K: constants.K / shape.K };
+}
+
+/** Fits the constant form; see `fitForm`. */
+export const fitConstant = (observations: readonly Observation[], options?: FitOptions): FitOutcome<ConstantFit> =>
+  fitForm('constant', observations, options) as FitOutcome<ConstantFit>;
+
+/** Fits the shaped form; see `fitForm`. */
+export const fitShaped = (observations: readonly Observation[], options?: FitOptions): FitOutcome =>
+  fitForm('shaped', observations, options);
+
+/** Fits the leg form; see `fitForm`. */
+export const fitLeg = (observations: readonly Observation[], options?: FitOptions): FitOutcome => fitForm('leg', observations, options);
 
 const constantsAt = ({ parameters }: NonlinearFit) => constantsOf({ parameters: parameters as Triple });
 
 const relativeTo = (parameters: Vector, direction: Vector | null) =>
   direction && direction.map((part, j) => part / Math.abs(parameters[j]!));
 
-const refuse = (missing: string, linear: LinearFit | null): FitOutcome => ({
+type Refused = Extract<FitOutcome, { readonly ok: false }>;
+
+const refuse = (missing: string, linear: LinearFit | null): Refused => ({
   ok: false,
   missing,
   rank: linear?.rank ?? 0,
@@ -71,7 +105,7 @@ const refuse = (missing: string, linear: LinearFit | null): FitOutcome => ({
 });
 
 /** What speaks against a solution, gravest first; null when nothing does. */
-function refusalOf({ status, parameters, linear }: NonlinearFit, used: readonly Observation[]): FitOutcome | null {
+function refusalOf({ status, parameters, linear }: NonlinearFit, used: readonly Observation[]): Refused | null {
   if (linear?.status !== 'solved') return refuse(tooLittle(used, relativeTo(parameters, linear?.weakest ?? null)), linear);
   const weakest = weakestCombination(parameters, linear.covariance);
   if (linear.condition > LARGEST_CONDITION || weakest.u > LARGEST_RELATIVE_UNCERTAINTY) {
@@ -82,10 +116,10 @@ function refusalOf({ status, parameters, linear }: NonlinearFit, used: readonly 
   return impossible.length === 0 ? null : refuse(`Together these charts give no positive ${impossible.join(' and ')}: ${CHECK}`, linear);
 }
 
-function describe({ parameters, linear, iterations, status, why }: NonlinearFit) {
+function describe(form: ModelForm, { parameters, linear, iterations, status, why }: NonlinearFit) {
   const { covariance, clusterCovariance, rank, condition } = linear as SolvedFit;
   return {
-    form: 'constant' as const,
+    form,
     parameters: parameters as Triple,
     covariance: clusterCovariance ? largerCovariance(covariance, clusterCovariance) : covariance,
     rank,
