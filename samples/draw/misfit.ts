@@ -1,5 +1,5 @@
-import { constantModule, type ModuleConstants } from '@/lib/module';
-import { read, type ReadingResult } from '@/lib/reading';
+import type { ThermoelectricModule } from '@/lib/module';
+import { moduleOf, read, type ReadingResult } from '@/lib/reading';
 import { intake } from '@/lib/server/pictures/intake';
 import { kelvin } from '@/lib/units';
 import type { Made } from './plan';
@@ -24,8 +24,7 @@ const CURRENTS = [0.2, 0.4, 0.6, 0.8, 1];
 const DIFFERENCES = [0, 0.2, 0.4, 0.6, 0.8, 1];
 
 /** Model less truth at one hot side: five currents up to Imax, six differences from none to where no heat is pumped any more. */
-function gapsAt(side: number, { truth }: Made, constants: ModuleConstants) {
-  const model = constantModule(constants);
+function gapsAt(side: number, { truth }: Made, model: ThermoelectricModule) {
   const { imaxLargestDeltaT, qmaxLargestDeltaT, vmaxV } = truth.ratings(side);
   const hot = kelvin(side + ZERO_CELSIUS);
   return CURRENTS.flatMap((part) => {
@@ -55,9 +54,8 @@ async function resultOf(sheet: DrawnSheet, { document }: DrawnReading): Promise<
 export async function misfitOf(sheet: DrawnSheet, reading: DrawnReading): Promise<Misfit> {
   const { model, modelMissing } = await resultOf(sheet, reading);
   if (!model) throw new Error(`${reading.name}: ${modelMissing}`);
-  const constants = { alpha: model.alpha.value, R: model.R.value, K: model.K.value };
   const sides = [...new Set(reading.document.charts.map(({ hotSideC }) => hotSideC ?? 27))];
-  const gaps = sides.flatMap((side) => gapsAt(side, reading.made, constants));
+  const gaps = sides.flatMap((side) => gapsAt(side, reading.made, moduleOf(model)));
   const implied = model.derived.find(({ hotSideC }) => hotSideC === sides[0]);
   const real = reading.made.truth.ratings(sides[0] ?? 27);
   const over = (value: number | undefined, truth: number) => (value ?? NaN) / truth;
@@ -100,6 +98,6 @@ export function misfitTable(misfits: readonly Misfit[]): string {
     ...misfits.map(row),
     '',
     `Against the truth, heat: ${spread('truthHeat')}. Voltage: ${spread('truthVoltage')}.`,
-    `Ratings that follow from the three constants over the true ones, in the middle: Imax ${implied('imax')}, Qmax ${implied('qmax')}, ΔTmax ${implied('dTmax')}, Vmax ${implied('vmax')}.`,
+    `Ratings that follow from the models over the true ones, in the middle: Imax ${implied('imax')}, Qmax ${implied('qmax')}, ΔTmax ${implied('dTmax')}, Vmax ${implied('vmax')}.`,
   ].join('\n');
 }

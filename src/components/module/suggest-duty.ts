@@ -1,6 +1,6 @@
 import { dutyTexts, type Duty } from '@/lib/duty';
-import { constantModule, currentForBestCop } from '@/lib/module';
-import type { ReadingModel } from '@/lib/reading';
+import { currentForBestCop, lumpedAt } from '@/lib/module';
+import { constantsOfModel, moduleOf, type ReadingModel } from '@/lib/reading';
 import { celsius, toKelvin } from '@/lib/units';
 
 const DELTA_T_K = 30;
@@ -9,12 +9,11 @@ const SMALL_SHARE = 0.2;
 
 const twoDigits = (value: number) => Number(value.toPrecision(2));
 
-/** A duty that a module is good at, to begin with: ΔT 30 K at a hot side of the sheet and the heat of its best COP there. */
+/** A duty that a module is good at, to begin with: ΔT 30 K at a hot side of the sheet and about the heat of its best COP there. */
 export function suggestedDuty(model: ReadingModel, hotSideC: number): Duty {
-  const constants = { alpha: model.alpha.value, R: model.R.value, K: model.K.value };
   const [Th, Tc] = [toKelvin(celsius(hotSideC)), toKelvin(celsius(hotSideC - DELTA_T_K))];
-  const current = currentForBestCop(constants, Tc, Th) ?? 0;
-  const heat = constantModule(constants).heat(current, Tc, Th);
+  const current = currentForBestCop(lumpedAt(model.form, constantsOfModel(model), Tc, Th), Tc, Th) ?? 0;
+  const heat = moduleOf(model).heat(current, Tc, Th);
   const qmax = model.derived[0]?.qmaxW.value ?? 1;
   return { heatW: twoDigits(heat > 0 ? heat : SMALL_SHARE * qmax), coldFaceC: hotSideC - DELTA_T_K, hotFaceC: hotSideC };
 }

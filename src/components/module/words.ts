@@ -39,6 +39,18 @@ export function identityRows(module: ModuleView): [string, string | null][] {
   ];
 }
 
+/** The temperature of every α, R and K that is not effective over a sheet. */
+export const REFERENCE = formatWithUnit(27, 'C');
+
+const FORMS: Readonly<Record<ReadingModel['form'], string>> = {
+  constant: 'three constants',
+  shaped: 'constants that follow the mean temperature',
+  leg: 'legs that change along their length',
+};
+
+/** What a form of the model is, in a few words. */
+export const formWords = (form: ReadingModel['form']): string => FORMS[form];
+
 /** What the form leaves, in percent of the model's maxima. */
 export function misfitText({ rmsPercentOfQmax, rmsPercentOfVmax }: ReadingModel): string | null {
   const part = (percent: number | null, of: string) =>

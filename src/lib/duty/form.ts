@@ -2,11 +2,18 @@ import {
   constantModule,
   currentForHeat,
   currentForMostHeat,
+  lumpedAt,
   maximaAtHotSide,
+  maximaOf,
+  moduleOfForm,
+  numericCurrents,
+  responseOf,
+  type ModelForm,
   type ModuleConstants,
   type ThermoelectricModule,
 } from '@/lib/module';
-import type { Kelvin } from '@/lib/units';
+import { findRoot } from '@/lib/numeric';
+import { kelvin, type Kelvin } from '@/lib/units';
 import type { CandidateModel } from './types';
 
 /** Slopes at one state. */
@@ -58,7 +65,42 @@ function constantForm(constants: ModuleConstants): Form {
   };
 }
 
+const NO_SLOPES: Slopes = { heatPerA: NaN, voltPerA: NaN, heat: [NaN, NaN, NaN, 1, 0], voltage: [NaN, NaN, NaN, 0, 1] };
+
+/** Coldest face at which a ΔT without heat is looked for, as a share of the hot face's temperature (below any module; our own choice). */
+const COLDEST_SHARE = 0.45;
+
+/** Any other form, by roots of its own heat: between faces that no current pumps heat over, what the lumped equations would say. */
+function numericForm(form: ModelForm, constants: ModuleConstants): Form {
+  const currents = numericCurrents(form, constants);
+  const module = moduleOfForm(form, constants);
+  const largest = new Map<Kelvin, { readonly currentA: number; readonly deltaTK: number }>();
+  return {
+    module,
+    currentForHeat: currents.forHeat,
+    currentForMostHeat: (Tc, Th) => currents.mostHeat(Tc, Th) ?? currentForMostHeat(lumpedAt(form, constants, Tc, Th), Tc),
+    currentForVoltage: (voltageV, Tc, Th) => (Number.isFinite(voltageV) ? module.currentAtVoltage(voltageV, Tc, Th) : voltageV),
+    largestDeltaT: (Th) => {
+      const known = largest.get(Th);
+      if (known) return known;
+      const { imaxLargestDeltaT: currentA, dTmaxK: deltaTK } = maximaOf(form, constants, Th);
+      largest.set(Th, { currentA, deltaTK });
+      return { currentA, deltaTK };
+    },
+    deltaTWithoutHeat: (I, Th) => {
+      const heatOver = (deltaT: number) => module.heat(I, kelvin(Th - deltaT), Th);
+      return heatOver(0) > 0 ? (findRoot(heatOver, 0, (1 - COLDEST_SHARE) * Th) ?? NaN) : heatOver(0);
+    },
+    slopes: (I, Tc, Th) => {
+      const found = responseOf(form, constants, I, Tc, Th);
+      if (found === null) return NO_SLOPES;
+      const { heatByCurrent: heatPerA, voltageByCurrent: voltPerA, heatBy, voltageBy } = found;
+      return { heatPerA, voltPerA, heat: [...heatBy, 1, 0], voltage: [...voltageBy, 0, 1] };
+    },
+  };
+}
+
 /** The form of a candidate's model. */
-export function formOf({ parameters: [alpha, R, K] }: Pick<CandidateModel, 'form' | 'parameters'>): Form {
-  return constantForm({ alpha, R, K });
+export function formOf({ form, parameters: [alpha, R, K] }: Pick<CandidateModel, 'form' | 'parameters'>): Form {
+  return form === 'constant' ? constantForm({ alpha, R, K }) : numericForm(form, { alpha, R, K });
 }

@@ -1,3 +1,4 @@
+import type { ModelForm } from '@/lib/module';
 import type { Validity } from '@/lib/reading';
 
 /** What a module must do: the heat to pump between two face temperatures, within what the supply gives. */
@@ -17,8 +18,8 @@ export interface Duty {
 
 /** An approved model as the search needs it. */
 export interface CandidateModel {
-  readonly form: 'constant';
-  /** α in V/K, R in ohm, K in W/K. */
+  readonly form: ModelForm;
+  /** α in V/K, R in ohm, K in W/K: effective ones for the constant form, else those at 300.15 K. */
   readonly parameters: readonly [alpha: number, R: number, K: number];
   /** Covariance of the parameters, in their order. */
   readonly covariance: readonly (readonly number[])[];

@@ -151,7 +151,7 @@ export const fromReadingDocument = (document: ReadingDocument, picture: (image: 
     }
     charts.push(fromChart(chart, found, id));
   }
-  const form = document.model?.form === 'constant' ? 'constant' : 'auto';
+  const form = document.model?.form ?? 'auto';
   const note = typeof document.note === 'string' && document.note ? { note: document.note } : {};
   return { ok: true, document: { ...emptyDocument(), charts, model: { form, use: ['curves'] }, ...note } };
 };

@@ -1,4 +1,5 @@
 import type { FrameKind, Px, Scale } from '@/lib/geometry';
+import type { ModelForm } from '@/lib/module';
 import type { RatingKey } from '@/lib/reading';
 import type { Quantity, Unit } from '@/lib/units';
 
@@ -71,7 +72,7 @@ export interface BenchDocument {
   readonly format: 'couplet.bench';
   readonly version: 1;
   readonly charts: readonly BenchChart[];
-  readonly model: { readonly form: 'auto' | 'constant'; readonly use: readonly ['curves'] };
+  readonly model: { readonly form: 'auto' | ModelForm; readonly use: readonly ['curves'] };
   readonly note?: string | undefined;
 }
 

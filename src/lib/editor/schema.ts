@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { MODEL_FORMS } from '@/lib/module';
 import type { RatingKey } from '@/lib/reading';
 import { QUANTITIES, unitsOf, type Unit } from '@/lib/units';
 import { LIMITS, type BenchDocument } from './document';
@@ -59,7 +60,7 @@ const buildDocument = (): z.ZodType<BenchDocument, BenchDocument> =>
     format: z.literal('couplet.bench'),
     version: z.literal(1),
     charts: list(buildChart(), LIMITS.charts).refine(distinctIds, 'Two charts have the same id.'),
-    model: z.strictObject({ form: z.enum(['auto', 'constant']), use: z.tuple([z.literal('curves')]).readonly() }),
+    model: z.strictObject({ form: z.enum(['auto', ...MODEL_FORMS]), use: z.tuple([z.literal('curves')]).readonly() }),
     note: z.string().max(LIMITS.note).optional(),
   });
 

@@ -1,8 +1,8 @@
-import { MODEL_FORMS, type ModelForm } from '@/lib/module';
+import { MODEL_FORMS, type ModelForm, type ModuleConstants } from '@/lib/module';
 import { mean } from '@/lib/numeric';
-import { fitForm } from './fit-form';
+import { fitForm, refit } from './fit-form';
 import { observe } from './observable';
-import { constantsOf, type FitOutcome, type ModuleFit, type Observation } from './types';
+import type { FitOutcome, ModuleFit, Observation } from './types';
 import { curveOf, POINTS_A_CURVE } from './weights';
 
 /** How well one form foretells what it was not fitted to. */
@@ -65,11 +65,11 @@ function foldsOf(observations: readonly Observation[], leftOut: 'hotSide' | 'cur
   });
 }
 
-/** Mean square of what a fit foretells wrongly along each curve, as a share of the axis range; null where it has no answer for a point. */
-function errorsByCurve(fit: ModuleFit, points: readonly Observation[]): ReadonlyMap<string, number> | null {
+/** Mean square of what a form foretells wrongly along each curve, as a share of the axis range; null where it has no answer for a point. */
+function errorsByCurve(form: ModelForm, constants: ModuleConstants, points: readonly Observation[]): ReadonlyMap<string, number> | null {
   const errors = new Map<string, number[]>();
   for (const point of points) {
-    const answer = observe(constantsOf(fit), point.answer, point, fit.form);
+    const answer = observe(constants, point.answer, point, form);
     if (answer === null) return null;
     const name = curveOf(point);
     errors.set(name, [...(errors.get(name) ?? []), ((point.value - answer.value) / point.range) ** 2]);
@@ -82,8 +82,8 @@ function foretold(whole: ModuleFit, observations: readonly Observation[], folds:
   const errors = new Map<string, number>();
   for (const isOut of folds) {
     const rest = observations.filter((point) => !isOut(point));
-    const outcome = fitForm(whole.form, rest, { start: constantsOf(whole) });
-    const found = outcome.ok ? errorsByCurve(outcome.fit, observations.filter(isOut)) : null;
+    const constants = refit(whole, rest);
+    const found = constants && errorsByCurve(whole.form, constants, observations.filter(isOut));
     for (const [name, error] of found ?? []) errors.set(name, error);
   }
   return errors;

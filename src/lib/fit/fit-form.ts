@@ -6,13 +6,11 @@ import { gapOf, tooLittle } from './missing';
 import { modelOf, problemOf, tripleOf, type Triple } from './problem';
 import { remainderOf } from './residuals';
 import { startConstants } from './start';
-import { constantsOf, type ConstantFit, type FitOutcome, type Observation } from './types';
+import { constantsOf, type ConstantFit, type FitOutcome, type ModuleFit, type Observation } from './types';
 import { MISFIT_FLOOR } from './weights';
 
 /** How a fit may differ from the usual one. */
 export interface FitOptions {
-  /** Where to begin, for a form of which nearly the same fit is known. */
-  readonly start?: ModuleConstants | undefined;
   /** Share of the axis range granted to every point beside its reading uncertainty; 0.005 when left out. */
   readonly misfitFloor?: number | undefined;
 }
@@ -41,15 +39,18 @@ const UNSETTLED = `The fit did not settle on one answer: ${CHECK}`;
  * iteration does not settle, the outcome is one sentence and no number. Throws a RangeError for what is no observation:
  * not finite, without range, or with both or neither of I and V.
  */
-export function fitForm(form: ModelForm, observations: readonly Observation[], options: FitOptions = {}): FitOutcome {
+export function fitForm(
+  form: ModelForm,
+  observations: readonly Observation[],
+  { misfitFloor = MISFIT_FLOOR }: FitOptions = {},
+): FitOutcome {
   checkObservations(observations);
-  const { misfitFloor = MISFIT_FLOOR } = options;
   const used = observations.filter(({ omitted }) => omitted !== true);
   if (used.length < 3) return refuse(gapOf(used) ?? TOO_FEW, null);
   const problem = problemOf(used, misfitFloor, form);
-  const begun = options.start ?? startFor(used, problem.weights);
+  const begun = startFor(used, problem.weights);
   if ('ok' in begun) return begun;
-  const start = options.start ?? atReference(form, begun, used);
+  const start = atReference(form, begun, used);
   if (form !== 'constant' && !Object.values(start).every((value) => value > 0)) return fitForm('constant', observations);
   const solution = gaussNewton({ ...problem, start: tripleOf(start) });
   const refusal = refusalOf(solution, used);
@@ -59,6 +60,17 @@ export function fitForm(form: ModelForm, observations: readonly Observation[], o
       fit: { ...describe(form, solution), ...remainderOf(constantsAt(solution), observations, misfitFloor, form) },
     }
   );
+}
+
+/** A refit has settled when no parameter changes by more than this share: far less than leaving anything out changes them. */
+const NEARLY = 1e-4;
+
+/** The constants of a form fitted to part of what a whole fit rests on, beginning from that; null where the part does not determine them. */
+export function refit({ form, parameters }: ModuleFit, observations: readonly Observation[]): ModuleConstants | null {
+  if (observations.length < 3 || gapOf(observations) !== null) return null;
+  const problem = problemOf(observations, MISFIT_FLOOR, form);
+  const solution = gaussNewton({ ...problem, clusters: undefined, start: parameters, tolerance: NEARLY });
+  return refusalOf(solution, observations) === null ? constantsAt(solution) : null;
 }
 
 /** Constants that fit nearly, or why there are none: a chart that is missing, or points that no constants answer. */

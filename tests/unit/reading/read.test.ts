@@ -101,6 +101,7 @@ describe('the result of a document of marks and points', () => {
       'tolerancePercent',
       'validity',
       'derived',
+      'choice',
     ]);
   });
 
@@ -188,8 +189,6 @@ describe('a document is refused', () => {
     ],
     ['marks to be found', 'charts[1].marks', heatWith({ marks: undefined }), /does not find the frame/],
     ['curves to be found', 'charts[1].curves', heatWith({ curves: undefined }), /does not find the curves/],
-    ['the shaped form', 'model.form', plainDocument(undefined, { model: { form: 'shaped' } }), /constant form only, not shaped/],
-    ['the leg form', 'model.form', plainDocument(undefined, { model: { form: 'leg' } }), /constant form only, not leg/],
     ['ratings', 'model.use[1]', plainDocument(undefined, { model: { use: ['curves', 'ratings'] } }), /curves only, not ratings/],
     ['the AC resistance', 'model.use[0]', plainDocument(undefined, { model: { use: ['acResistance'] } }), /curves only, not acResistance/],
   ])('when it asks what cannot be done yet: %s', async (_, path, json, message) => {
@@ -277,6 +276,6 @@ describe('what an approval is the hash of', () => {
   it('is document, pixels, model and engine', async () => {
     const document = documentOf(plainDocument());
     const { model } = await read(document, blankHost);
-    expect(hashMaterial(document, ['a', 'b'], model, ENGINE)).toEqual({ document, pixelsSha256: ['a', 'b'], model, engine: '1.0.0' });
+    expect(hashMaterial(document, ['a', 'b'], model, ENGINE)).toEqual({ document, pixelsSha256: ['a', 'b'], model, engine: '1.1.0' });
   });
 });

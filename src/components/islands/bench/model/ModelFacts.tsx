@@ -40,7 +40,9 @@ export function ModelFacts({ model }: { model: ReadingModel }) {
         </dd>
       </dl>
       <p className="hint">
-        {model.at === 'effective' ? 'Effective over this sheet: one value each for all its temperatures. ' : ''}
+        {model.at === 'effective'
+          ? 'Effective over this sheet: one value each for all its temperatures. '
+          : `α, R and K are those at ${formatWithUnit(27, 'C')}. `}
         Figures in brackets are the standard uncertainty of the reading in the last digits, not the tolerance of a delivered module.
       </p>
     </>
