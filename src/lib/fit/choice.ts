@@ -89,12 +89,28 @@ function foretold(whole: ModuleFit, observations: readonly Observation[], folds:
   return errors;
 }
 
-/** The mean of values, and its standard error; that of a single value is as large as the value. */
-function meanWithError(values: readonly number[]): readonly [mean: number, error: number] {
+/** Standard error of the mean of values; that of a single one is as large as itself. */
+function standardError(values: readonly number[]): number {
   const middle = mean(values);
-  if (values.length < 2) return [middle, Math.abs(middle)];
+  if (values.length < 2) return Math.abs(middle);
   const squares = values.reduce((sum, value) => sum + (value - middle) ** 2, 0);
-  return [middle, Math.sqrt(squares / (values.length * (values.length - 1)))];
+  return Math.sqrt(squares / (values.length * (values.length - 1)));
+}
+
+/** A curve that was left out, and with which others at the same time. */
+interface LeftOut {
+  readonly name: string;
+  readonly fold: number;
+}
+
+/**
+ * Standard error of the mean of one value a curve, over curves or over what was left out together, whichever is larger: curves that are left out
+ * together are foretold by one and the same fit and err alike.
+ */
+function errorOver(curves: readonly LeftOut[], values: readonly number[]): number {
+  const folds = [...new Set(curves.map(({ fold }) => fold))];
+  const together = folds.map((fold) => mean(values.filter((_, i) => curves[i]!.fold === fold)));
+  return Math.max(standardError(values), standardError(together));
 }
 
 interface Tried {
@@ -104,17 +120,17 @@ interface Tried {
 
 /**
  * The form whose mean square error over the curves that every form could foretell is least; the leg form also where it is worse by no more than one
- * standard error of the differences, curve by curve (the one-standard-error rule of L. Breiman et al., Classification and Regression Trees,
+ * standard error of the differences (see `errorOver`; the one-standard-error rule of L. Breiman et al., Classification and Regression Trees,
  * 1984, ch. 3, from memory, turned towards the form that holds at other temperatures).
  */
-function bestOf(tried: readonly Tried[], curves: readonly string[]): Tried {
+function bestOf(tried: readonly Tried[], curves: readonly LeftOut[]): Tried {
   const leg = tried.find(({ outcome }) => outcome.fit.form === 'leg');
-  const score = ({ errors }: Tried) => mean(curves.map((name) => errors.get(name)!));
+  const score = ({ errors }: Tried) => mean(curves.map(({ name }) => errors.get(name)!));
   if (curves.length === 0) return leg ?? tried[0]!;
   const best = tried.reduce((a, b) => (score(b) < score(a) ? b : a));
   if (!leg || leg === best) return best;
-  const [difference, error] = meanWithError(curves.map((name) => leg.errors.get(name)! - best.errors.get(name)!));
-  return difference <= error ? leg : best;
+  const worse = curves.map(({ name }) => leg.errors.get(name)! - best.errors.get(name)!);
+  return mean(worse) <= errorOver(curves, worse) ? leg : best;
 }
 
 /**
@@ -130,12 +146,14 @@ export function fitBest(observations: readonly Observation[]): ChosenFit | Extra
   for (const leftOut of ['hotSide', 'curve'] as const) {
     const folds = foldsOf(few, leftOut);
     const tried = fits.map((outcome): Tried => ({ outcome, errors: foretold(outcome.fit, few, folds) }));
-    const curves = [...tried[0]!.errors.keys()].filter((name) => tried.every(({ errors }) => errors.has(name)));
+    const curves = [...tried[0]!.errors.keys()]
+      .filter((name) => tried.every(({ errors }) => errors.has(name)))
+      .map((name): LeftOut => ({ name, fold: folds.findIndex((isOut) => few.some((point) => curveOf(point) === name && isOut(point))) }));
     if (curves.length === 0) continue;
     const scoreOf = (form: ModelForm) => tried.find(({ outcome }) => outcome.fit.form === form);
     const scores = MODEL_FORMS.map((form) => {
       const errors = scoreOf(form)?.errors;
-      return { form, percentOfRange: errors ? 100 * Math.sqrt(mean(curves.map((name) => errors.get(name)!))) : null };
+      return { form, percentOfRange: errors ? 100 * Math.sqrt(mean(curves.map(({ name }) => errors.get(name)!))) : null };
     });
     return { outcome: bestOf(tried, curves).outcome, choice: { leftOut, scores } };
   }
