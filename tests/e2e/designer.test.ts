@@ -155,7 +155,7 @@ describe('a module', () => {
     await page.goto(`/modules/${plain}?hot=50&show=voltage`);
     expect(await page.getByRole('heading', { level: 1 }).textContent()).toBe('Burbot 40-A');
     await page.getByRole('figure', { name: 'Voltage with the hot side at 50' }).waitFor();
-    const model = page.getByRole('region', { name: 'Model, effective over this sheet' });
+    const model = page.getByRole('region', { name: /^Model, (effective over this sheet|at 27.°C)$/ });
     expect(plainSpaces(await model.textContent())).toMatch(/Seebeck coefficient α\s*0\.0\d+\(\d+\) V\/K/);
     const evidence = page.getByRole('region', { name: 'Evidence' });
     expect(await evidence.textContent()).toMatch(/QC-7, rev\. B[\s\S]*Ilse Marrow[\s\S]*Soren Quill/);

@@ -13,12 +13,14 @@ const resultOf = (reading: (typeof manifest.readings)[number]) =>
   read(documentOf(reading.file), { picture: (image) => sizeOf(`sheets/${reading.sheet}/${image}`) });
 
 describe('the product reads every sample', () => {
-  test.each(manifest.readings)('$module gets a model that misses by what three constants miss', async (reading) => {
+  test.each(manifest.readings)('$module gets the leg form, and misses less than any constants could', async (reading) => {
     const { model, modelMissing, charts } = await resultOf(reading);
     expect(modelMissing).toBeNull();
-    // Three constants on a real leg: about 1 % of Qmax, voltage 4 to 9 % of Vmax (worked out for this project, no outside source).
-    expect(model?.rmsPercentOfQmax).toBeLessThan(2.5);
-    expect(model?.rmsPercentOfVmax).toBeLessThan(9);
+    // Three constants on a real leg: about 1 % of Qmax, voltage 4 to 9 % of Vmax; legs of the published shapes on other material: heat 0.1 to
+    // 0.4 % in the sheet, up to 2 % over two hot sides, voltage about 1 % (worked out for this project, no outside source).
+    expect(model?.form).toBe('leg');
+    expect(model?.rmsPercentOfQmax).toBeLessThan(1);
+    expect(model?.rmsPercentOfVmax).toBeLessThan(1);
     for (const { frame } of charts) expect(frame.residualPx).toBeLessThan(1);
   });
 
