@@ -63,7 +63,7 @@ export function fitForm(
 }
 
 /** A refit has settled when no parameter changes by more than this share: far less than leaving anything out changes them. */
-const NEARLY = 1e-4;
+const NEARLY = 1e-6;
 
 /** The constants of a form fitted to part of what a whole fit rests on, beginning from that; null where the part does not determine them. */
 export function refit({ form, parameters }: ModuleFit, observations: readonly Observation[]): ModuleConstants | null {
