@@ -8,6 +8,7 @@ import {
   updateSheet,
   vendorNamed,
   type SheetRecord,
+  raiseCounter,
 } from '@db';
 import { can } from '@/lib/access';
 import type { SheetBody, SheetRow, SheetView } from '@/lib/contracts';
@@ -78,6 +79,7 @@ export async function changeSheet(actor: SignedInPerson, id: number, version: nu
     const vendor = await vendorNamed(name);
     if (vendor.id !== before.vendor.id) await requireNoReadings(before);
     if (!(await updateSheet(id, version, vendor.id, rest))) throw lostRace(toSheetView(before, []));
+    await raiseCounter('catalogue'); // its words are searched
     await addTrail({ userId: actor.id, action: 'changed sheet', object: `sheet/${id}` });
   });
   return sheetFor(actor, id);
