@@ -48,10 +48,10 @@ export function Bench({ reading, personId }: BenchProps) {
 }
 
 /** Whatever stopped the bench, the draft is kept in the browser and sent to the server once more. */
-const keepNow = async ({ unsaved, saver, store, reading }: ReturnType<typeof makeTools>) => {
+const keepNow = async ({ unsaved, saver, store, reading, tab }: ReturnType<typeof makeTools>) => {
   if (!saver.unsaved()) return;
   const document = store.get().history.present;
-  await unsaved.keep({ readingId: reading.id, version: saver.confirmedVersion(), document, at: new Date().toISOString() });
+  await unsaved.keep({ readingId: reading.id, tab, version: saver.confirmedVersion(), document, at: new Date().toISOString() });
   await saver.flush();
 };
 

@@ -5,7 +5,10 @@ import { Toolbar } from '@/components/ui/Toolbar';
 import { ZOOM_STEP, type Tool } from '@/lib/editor';
 import { useBench, useTools } from '../state/tools';
 
-const PLACES = { frame: 'Place marks', curves: 'Place points' } as const;
+const PLACES = { frame: 'marks', curves: 'points' } as const;
+
+/** A word that goes where there is little room. */
+const Wide = ({ children }: { children: string }) => <span className="bench-wide">{children}</span>;
 
 /** The tools of the station in hand, and the zoom. */
 export const StageToolbar = memo(function StageToolbar({ onHelp }: { onHelp: () => void }) {
@@ -19,13 +22,18 @@ export const StageToolbar = memo(function StageToolbar({ onHelp }: { onHelp: () 
       {(station === 'frame' || station === 'curves') && !frozen && (
         <>
           <ToggleButton size="small" isSelected={tool === 'place'} onChange={use('place')} aria-keyshortcuts="P">
-            {PLACES[station]}
+            Place <Wide>{PLACES[station]}</Wide>
           </ToggleButton>
           <ToggleButton size="small" isSelected={tool === 'select'} onChange={use('select')} aria-keyshortcuts="V">
-            Pick and move
+            Pick <Wide>and move</Wide>
           </ToggleButton>
           {picked && (
-            <ToggleButton size="small" isSelected={tool === 'target'} onChange={(on) => use(on ? 'target' : 'select')()}>
+            <ToggleButton
+              size="small"
+              isSelected={tool === 'target'}
+              className="bench-wide"
+              onChange={(on) => use(on ? 'target' : 'select')()}
+            >
               Move it here
             </ToggleButton>
           )}
