@@ -40,6 +40,7 @@ export default defineConfig({
           fileParallelism: false,
         },
       },
+      { resolve, test: { name: 'long', include: ['tests/long/**/*.test.ts'], testTimeout: 1_800_000, fileParallelism: false } },
     ],
   },
 });

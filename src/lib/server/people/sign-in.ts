@@ -47,7 +47,7 @@ export async function signIn(attempt: {
     await addTrail({ userId: person?.id ?? null, action: 'sign-in refused' });
     throw wrong();
   }
-  await byAccount.delete(account);
+  await Promise.all([byAccount.delete(account), byAddress.reward(attempt.address)]); // only wrong tries count
   if (attempt.previous) await lucia().invalidateSession(attempt.previous);
   await deleteExpiredSessions(new Date());
   const session = await lucia().createSession(person.id, { agent: attempt.agent.slice(0, LONGEST_AGENT) });
