@@ -28,7 +28,7 @@ describe('what stands beside the picture', () => {
 
   test('the head of a column is the symbol over the unit, and over the rating where it is normalised', () => {
     expect([axisHead(framed, 'x'), axisHead(blank, 'y')]).toEqual(['ΔT / K', 'y']);
-    expect(axisHead({ ...framed, y: { quantity: 'Qc', unit: '%', scale: 'linear', of: 'qmaxW' } }, 'y')).toBe('Qc / Qmax / %');
+    expect(axisHead({ ...framed, y: { quantity: 'Qc', unit: '%', scale: 'linear', of: 'qmaxW' } }, 'y')).toBe('Qc/Qmax / %');
     expect(axisHead({ ...framed, y: { quantity: 'COP', unit: '1', scale: 'linear' } }, 'y')).toBe('COP');
   });
 
