@@ -24,7 +24,7 @@ async function takeATry(limiter: RateLimiterMemory, key: string): Promise<void> 
   } catch (error) {
     if (!(error instanceof RateLimiterRes)) throw error;
     const seconds = Math.max(1, Math.ceil(error.msBeforeNext / 1000));
-    throw new Refusal(429, 'too-many-tries', `Too many tries. Wait ${seconds} s and try again.`, {
+    throw new Refusal(429, 'too-many-tries', `Too many tries. Wait ${seconds}\u00A0s and try again.`, {
       headers: { 'Retry-After': String(seconds) },
     });
   }

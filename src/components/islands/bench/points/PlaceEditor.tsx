@@ -119,7 +119,7 @@ const NudgeButtons = memo(function NudgeButtons() {
           key={name}
           size="small"
           icon
-          aria-label={`Move ${name} by ${step} px`}
+          aria-label={`Move ${name} by ${step}\u00A0px`}
           onPress={() => nudgeSelected(tools, [dx * Number(step), dy * Number(step)])}
         >
           {arrow}
