@@ -3,6 +3,9 @@ import { z } from 'zod';
 
 const LOOPBACK = new Set(['localhost', '127.0.0.1', '::1', '[::1]']);
 
+/** Whether a host name means this machine. */
+export const isLoopback = (hostname: string) => LOOPBACK.has(hostname);
+
 const onOff = z.enum(['on', 'off'], 'must be on or off').transform((word) => word === 'on');
 const whole = (min: number, max: number) =>
   z.coerce
