@@ -1,5 +1,5 @@
 import { constantsOf, impliedRatings, type ConstantFit, type Observation } from '@/lib/fit';
-import { kelvin, toCelsius } from '@/lib/units';
+import { kelvin, REFERENCE_KELVIN, toCelsius } from '@/lib/units';
 import type { ReadingDocument, ReadingModule } from './document';
 import type { DerivedRatings, ReadingModel, Validity } from './result';
 import { tidyAll } from './tidy';
@@ -31,10 +31,10 @@ function validityOf(fit: ConstantFit, observations: readonly Observation[]): Val
   };
 }
 
-/** Hot sides that charts and ratings name, each once, coldest first. */
+/** Hot sides that charts and ratings name, each once, coldest first; the reference temperature where a sheet names only cold sides. */
 function hotSidesOf({ charts, module }: ReadingDocument): number[] {
   const named = [...charts, ...(module.rated ?? [])].flatMap(({ hotSideC }) => hotSideC ?? []);
-  return [...new Set(named)].sort((a, b) => a - b);
+  return named.length > 0 ? [...new Set(named)].sort((a, b) => a - b) : [toCelsius(REFERENCE_KELVIN)];
 }
 
 function derivedAt(fit: ConstantFit, hotSideC: number): DerivedRatings {
