@@ -22,10 +22,10 @@ export const StageToolbar = memo(function StageToolbar({ onHelp }: { onHelp: () 
       {(station === 'frame' || station === 'curves') && !frozen && (
         <>
           <ToggleButton size="small" isSelected={tool === 'place'} onChange={use('place')} aria-keyshortcuts="P">
-            Place <Wide>{PLACES[station]}</Wide>
+            Place<Wide>{PLACES[station]}</Wide>
           </ToggleButton>
           <ToggleButton size="small" isSelected={tool === 'select'} onChange={use('select')} aria-keyshortcuts="V">
-            Pick <Wide>and move</Wide>
+            Pick<Wide>and move</Wide>
           </ToggleButton>
           {picked && (
             <ToggleButton
