@@ -249,7 +249,7 @@ describe('pages of a sheet', () => {
     await page.getByRole('button', { name: 'Take it off' }).click();
     await page.getByText('The page is off the sheet.').waitFor();
     expect(await pages(page).count()).toBe(0);
-    expect(await focused(page)).toBe('Pages');
+    await expect.poll(() => focused(page)).toBe('Pages');
   });
 
   test('a page on which a reading stands stays, and it is said why', async () => {
