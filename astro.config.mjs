@@ -4,6 +4,7 @@ import { defineConfig, passthroughImageService } from 'astro/config';
 import node from '@astrojs/node';
 import react from '@astrojs/react';
 import tailwind from '@astrojs/tailwind';
+import { out } from './scripts/build/out.mjs';
 import { serverSideFiles } from './scripts/build/server-files.mjs';
 
 const at = (/** @type {string} */ path) => fileURLToPath(new URL(path, import.meta.url));
@@ -11,7 +12,7 @@ const at = (/** @type {string} */ path) => fileURLToPath(new URL(path, import.me
 export default defineConfig({
   output: 'server',
   adapter: node({ mode: 'middleware' }),
-  outDir: process.env.COUPLET_OUT ?? './dist',
+  outDir: out,
   integrations: [react(), tailwind({ applyBaseStyles: false }), serverSideFiles()],
   server: { host: '127.0.0.1', port: 4321 },
   // Astro's own check refuses every same-origin multipart POST; src/middleware.ts keeps the gate instead.

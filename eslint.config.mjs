@@ -6,7 +6,7 @@ import reactHooks from 'eslint-plugin-react-hooks';
 import { roomRules } from './scripts/build/rooms.mjs';
 
 export default defineConfig(
-  { ignores: ['dist', '.astro', 'node_modules', 'public', 'uploads', 'tests/output', 'tests/fixtures', 'samples/**/*.json'] },
+  { ignores: ['dist*/**', '.astro', 'node_modules', 'public', 'uploads', 'tests/output', 'tests/fixtures', 'samples/**/*.json'] },
   js.configs.recommended,
   ts.configs.recommended,
   astro.configs.recommended,

@@ -7,7 +7,15 @@ const resolve = { alias: { '@db': at('./db/index.ts'), '@': at('./src') } };
 export default defineConfig({
   test: {
     projects: [
-      { resolve, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}', 'tests/checks/**/*.test.ts'], testTimeout: 20_000 } },
+      {
+        resolve,
+        test: {
+          name: 'unit',
+          include: ['tests/unit/**/*.test.{ts,tsx}', 'tests/checks/**/*.test.ts'],
+          setupFiles: ['tests/support/seed.ts'],
+          testTimeout: 20_000,
+        },
+      },
       {
         resolve,
         test: {
@@ -40,6 +48,7 @@ export default defineConfig({
           fileParallelism: false,
         },
       },
+      { resolve, test: { name: 'long', include: ['tests/long/**/*.test.ts'], testTimeout: 1_800_000, fileParallelism: false } },
     ],
   },
 });

@@ -3,11 +3,11 @@ import { spawnSync } from 'node:child_process';
 import { existsSync, readdirSync, statSync } from 'node:fs';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
+import { out } from './build/out.mjs'; // reads .env too
 
 export const root = fileURLToPath(new URL('..', import.meta.url));
 process.chdir(root);
 process.env.ASTRO_TELEMETRY_DISABLED ??= '1';
-if (existsSync('.env')) process.loadEnvFile('.env');
 
 export function sh(command, args, options = {}) {
   const run = spawnSync(command, args, { stdio: 'inherit', ...options });
@@ -54,7 +54,7 @@ const databaseSources = () =>
 
 export function build() {
   const latest = Math.max(...[...SOURCES, ...databaseSources()].map(newest));
-  if (changed('dist/server/node/boot.mjs') > latest) return;
+  if (changed(path.join(out, 'server/node/boot.mjs')) > latest) return;
   console.log('Building…');
   bin(['astro', 'astro.js'], 'build');
 }

@@ -1,13 +1,11 @@
 // Astro's handler behind a plain http server, so that headers and static files are settled before Astro reads a request.
-import { existsSync } from 'node:fs';
 import http from 'node:http';
 import path from 'node:path';
 import { pathToFileURL } from 'node:url';
+import { out } from './build/out.mjs'; // reads .env too
 import { serveStatic } from './static.mjs';
 
-if (existsSync('.env')) process.loadEnvFile('.env');
 process.env.ASTRO_NODE_AUTOSTART = 'disabled';
-const out = path.resolve(process.env.COUPLET_OUT ?? 'dist');
 const load = (file) => import(pathToFileURL(path.join(out, 'server', file)).href);
 
 let report;

@@ -126,5 +126,6 @@ export function initReadings(sequelize: Sequelize) {
   Reading.hasMany(ReadingEditor, { foreignKey: 'readingId', as: 'editors' });
   Reading.hasMany(FittedModel, { foreignKey: 'readingId', as: 'models' });
   Reading.hasMany(Decision, { foreignKey: 'readingId', as: 'decisions' });
+  Decision.belongsTo(Reading, { foreignKey: 'readingId', as: 'reading' });
   Decision.belongsTo(User, { foreignKey: 'userId', as: 'user' });
 }

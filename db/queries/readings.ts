@@ -191,10 +191,14 @@ export async function decisionsOf(readingIds: readonly number[]): Promise<Decisi
   return rows.map(toDecision);
 }
 
-export async function recentDecisions(what: readonly DecisionKind[], limit: number): Promise<DecisionRecord[]> {
+/** Newest approvals of readings that are approved still. */
+export async function recentApprovals(limit: number): Promise<DecisionRecord[]> {
   const rows = await Decision.findAll({
-    where: { what: { [Op.in]: [...what] } },
-    include: [{ model: User, as: 'user' }],
+    where: { what: 'approved' },
+    include: [
+      { model: User, as: 'user' },
+      { model: Reading, as: 'reading', attributes: [], where: { state: 'approved' } },
+    ],
     order: [['id', 'DESC']],
     limit,
   });

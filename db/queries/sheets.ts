@@ -195,6 +195,13 @@ export async function removePage(id: number): Promise<void> {
   await Page.destroy({ where: { id } });
 }
 
+/** States of the readings that stand on a picture, or on a sheet that holds it. */
+export async function readingStatesBesidePicture(pictureId: number): Promise<ReadingState[]> {
+  const pages = await Page.findAll({ where: { pictureId }, attributes: ['sheetId'] });
+  const rows = await Reading.findAll({ where: { sheetId: { [Op.in]: pages.map((page) => page.sheetId) } }, attributes: ['state'] });
+  return [...(await readingStatesWithPicture(pictureId)), ...rows.map((row) => row.state)];
+}
+
 /** States of the readings that stand on a picture. */
 export async function readingStatesWithPicture(pictureId: number): Promise<ReadingState[]> {
   const links = await ReadingPicture.findAll({ where: { pictureId } });

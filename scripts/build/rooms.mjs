@@ -1,6 +1,9 @@
+import { builtinModules } from 'node:module';
+
 /**
  * The rooms of the project and who may import whom, as ESLint rules.
  * pages → src/lib/server → db → contracts → pure rooms; a pure room imports only the rooms before it.
+ * `tests/unit/rooms/lint.test.ts` holds a sentence for every way in.
  */
 export const PURE_ROOMS = [
   'units',
@@ -17,98 +20,96 @@ export const PURE_ROOMS = [
   'access',
 ];
 
-const NOT_PURE = [
-  'react',
-  'react/*',
-  'react-dom',
-  'react-dom/*',
-  'react-konva',
-  'konva',
-  'astro',
-  'astro/*',
-  'astro:*',
-  'sequelize',
-  'sqlite3',
-  'sharp',
-  'node:*',
-  'fs',
-  'path',
-  'crypto',
-];
-const SERVER_ONLY = ['sequelize', 'sqlite3', 'umzug'];
+// Packages a pure room may use; every other one is refused.
+const MATHS = ['ml-matrix', 'simple-statistics'];
+const VALIDATION = { reading: ['zod'], editor: ['zod'], contracts: ['zod'] };
+const DRIVER_PACKAGES = ['sequelize', 'sqlite3', 'umzug'];
+const SERVER_PACKAGES = ['@node-rs/argon2', 'lucia', 'multer', 'nodemailer', 'pino', 'rate-limiter-flexible', 'sharp'];
 
-const forbid = (group, message) => ({ group, message });
-const restrict = (files, patterns, ignores = []) => ({
+const either = (names) => `(?:${names.join('|')})`;
+
+/** Every way to write a path under src: by alias, from the project's root, or by climbing out with `../`. */
+const under = (...places) => String.raw`^(?:@/|/?src/|.*\.\./(?:src/)?)${either(places)}(?:/|$)`;
+/** The same for a folder beside src. */
+const beside = (...folders) => String.raw`^(?:/?|.*\.\./)${either(folders)}(?:/|$)`;
+const packages = (...names) => `^${either(names)}(?:/|$)`;
+
+const refuse = (regex, message) => ({ regex, message });
+
+const DOORS = refuse(under(`lib/${either(PURE_ROOMS)}/.*`), 'Enter a room by its door: @/lib/<room>.');
+const DB_PARTS = refuse(`^@db/|${beside('db')}`, 'The database has one door: @db.');
+const DRIVERS = refuse(packages(...DRIVER_PACKAGES), 'Only db/ talks to Sequelize.');
+const TOOLS = refuse(beside('scripts', 'tests', 'samples'), 'What is served imports no scripts, tests or samples.');
+const DATABASE = refuse(`^@db(?:/|$)|${beside('db')}`, 'Only src/lib/server reaches the database: call a use case.');
+const SERVER = refuse(under('lib/server'), 'The server is above: components, contracts, db and pure rooms do not reach it.');
+const PAGES = refuse(under('pages', 'layouts', 'middleware'), 'Pages, layouts and middleware are on top: nothing below imports them.');
+const COMPONENTS = refuse(under('components'), 'The server and the database know no screens.');
+const BUILTINS = refuse(`^node:|${packages(...builtinModules)}`, 'Components run in a browser too, which has no Node built-ins.');
+const SERVER_ONLY = refuse(packages(...SERVER_PACKAGES), 'This package runs on the server only.');
+const climbing = (steps) =>
+  refuse(String.raw`^(?:\./)*(?:\.\./){${steps}}`, 'A relative import stays in src/lib/server: write @/ and the path.');
+
+/** What import() and a type's import('…') name, which no-restricted-imports does not see. */
+const LAZY = ':matches(ImportExpression, TSImportType, TSImportType > TSLiteralType) > Literal';
+const COMPUTED = {
+  selector: 'ImportExpression[source.type!="Literal"]',
+  message: 'Write the path of import() as a plain string, for lint to judge.',
+};
+
+const lazily = ({ regex, message }) => ({ selector: `${LAZY}[value=/${regex.replaceAll('/', String.raw`\x2F`)}/iu]`, message });
+
+const code = (...folders) => folders.map((folder) => `${folder}.{ts,tsx,mts,cts,js,jsx,mjs,cjs,astro}`);
+
+/** A file follows the last block of rules that names it, so each block states everything. */
+const block = (files, refusals, { syntax = refusals.map(lazily), globals = [] } = {}) => ({
   files,
-  ignores,
-  rules: { 'no-restricted-imports': ['error', { patterns }] },
+  rules: {
+    'no-restricted-imports': ['error', { patterns: refusals }],
+    'no-restricted-syntax': ['error', ...syntax],
+    'no-restricted-globals': ['error', ...globals],
+  },
 });
-
-const DOORS = forbid(
-  PURE_ROOMS.map((room) => `@/lib/${room}/*`),
-  'Enter a room by its door: @/lib/<room>.',
-);
-const DB_DOOR = forbid(
-  ['@db/*', '**/db/connection*', '**/db/models/*', '**/db/queries/*', '**/db/migrations/*'],
-  'The database has one door: @db.',
-);
-const DRIVERS = forbid(SERVER_ONLY, 'Only db/ talks to Sequelize.');
-const SERVER = forbid(['@/lib/server', '@/lib/server/*', '@db'], 'A browser or pure file must not reach the server or the database.');
-const PURITY = forbid(
-  NOT_PURE,
-  'Pure rooms run in a browser worker, on the server and in the command: no React, Konva, Astro, Sequelize, Node or DOM.',
-);
-const OUTWARD = forbid(
-  ['@/lib/contracts', '@/lib/contracts/*', '@/components/*', '@/layouts/*', '@/pages/*', '@/middleware'],
-  'Imports go pages → server → db → contracts → pure rooms, never the other way.',
-);
+const served = (files, refusals) => block(files, refusals, { syntax: [COMPUTED, ...refusals.map(lazily)] });
 
 const DOM_GLOBALS = ['window', 'document', 'navigator', 'localStorage', 'fetch', 'process', 'Buffer', 'require'];
+const PURE = {
+  syntax: [
+    { selector: 'ImportExpression, TSImportType', message: 'A pure room imports at the top of the file only.' },
+    { selector: 'MetaProperty', message: 'A pure room does not know where it runs.' },
+  ],
+  globals: DOM_GLOBALS.map((name) => ({ name, message: 'Pure rooms know no Node and no DOM.' })),
+};
 
-const pureRules = PURE_ROOMS.flatMap((room, at) => [
-  restrict(
-    [`src/lib/${room}/**/*.ts`],
-    [
-      PURITY,
-      SERVER,
-      OUTWARD,
-      DOORS,
-      forbid(
-        PURE_ROOMS.slice(at).flatMap((later) => [`@/lib/${later}`, `@/lib/${later}/*`]),
-        `${room} may import only the rooms before it: ${PURE_ROOMS.slice(0, at).join(', ') || 'none'}; inside a room use relative paths.`,
-      ),
-    ],
-  ),
-  {
-    files: [`src/lib/${room}/**/*.ts`],
-    rules: { 'no-restricted-globals': ['error', ...DOM_GLOBALS.map((name) => ({ name, message: 'Pure rooms know no Node and no DOM.' }))] },
-  },
-]);
+/** A pure room refuses all but its own files, the doors of the rooms before it, and a few packages. */
+function pureRoom(room, at, rooms) {
+  const before = rooms.slice(0, at);
+  const libraries = [...MATHS, ...(VALIDATION[room] ?? [])];
+  const own = String.raw`\.(?:/(?!.*\.\.(?:/|$)).*)?$`;
+  const allowed = [own, `@/lib/${either(before)}$`, `${either(libraries)}$`];
+  const message =
+    `${room} runs in a browser worker, on the server and in the command, so it may import only its own files (./…), ` +
+    `the doors of the rooms before it (${before.join(', ') || 'none'}) and ${libraries.join(', ')}.`;
+  return block(code(`src/lib/${room}/**/*`), [refuse(`^(?!${either(allowed)})`, message)], PURE);
+}
+
+const SERVED = [DOORS, DRIVERS, TOOLS];
+const BROWSER = [...SERVED, DATABASE, SERVER, PAGES, BUILTINS, SERVER_ONLY];
 
 export const roomRules = [
-  restrict(
-    ['src/**/*.{ts,tsx,astro}', 'scripts/**/*.ts', 'tests/**/*.{ts,tsx}'],
-    [DOORS, DB_DOOR, DRIVERS],
-    ['tests/db/**', ...PURE_ROOMS.map((room) => `tests/unit/${room}/**`)],
+  // Pages, layouts, middleware: drawn on the server, through use cases.
+  served(code('src/**/*'), [...SERVED, DATABASE]),
+  served(code('src/layouts/**/*'), [...SERVED, DATABASE, refuse(under('pages', 'middleware'), 'A layout is below the pages.')]),
+  served(code('src/components/**/*'), BROWSER),
+  served(code('src/**/*.astro/*'), BROWSER), // the <script> elements of pages and layouts
+  served(code('src/lib/server/*/**/*'), [...SERVED, DB_PARTS, COMPONENTS, PAGES, climbing(2)]),
+  served(code('src/lib/server/*'), [...SERVED, DB_PARTS, COMPONENTS, PAGES, climbing(1)]),
+  served(code('db/**/*'), [DOORS, TOOLS, SERVER, COMPONENTS, PAGES]),
+  ...[...PURE_ROOMS, 'contracts'].map(pureRoom),
+  block(['scripts/**/*.ts', 'tests/**/*.{ts,tsx}'], [DOORS, DB_PARTS, DRIVERS]),
+  // A room's own tests may look inside it.
+  block(['tests/db/**/*.ts'], [DOORS]),
+  block(
+    PURE_ROOMS.map((room) => `tests/unit/${room}/**/*.ts`),
+    [DB_PARTS, DRIVERS],
   ),
-  restrict(['src/components/**/*.{ts,tsx}'], [SERVER, DOORS]),
-  restrict(
-    ['src/lib/contracts/**/*.ts'],
-    [SERVER, DOORS, forbid(['@/components/*', '@/pages/*'], 'Contracts are imported by both sides and import only pure rooms.')],
-  ),
-  restrict(
-    ['db/**/*.ts'],
-    [
-      DOORS,
-      forbid(
-        ['@/lib/server', '@/lib/server/*', '@/components/*', '@/pages/*'],
-        'db is below the server: it imports contracts and pure rooms only.',
-      ),
-    ],
-  ),
-  restrict(
-    ['src/lib/server/**/*.ts'],
-    [DOORS, DB_DOOR, DRIVERS, forbid(['@/components/*', '@/pages/*', '@/layouts/*'], 'The server knows no screens.')],
-  ),
-  ...pureRules,
 ];

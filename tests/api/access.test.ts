@@ -20,6 +20,7 @@ const TABLE: Record<OperationName, readonly Who[]> = {
   sessions: [E, L, D, A],
   endSession: [E, L, D, A],
   changePassword: [E, L, D, A],
+  today: [E, L, D, A],
   vendors: [E, L, D, A],
   vendor: [E, L, D, A],
   createModule: [E, L],

@@ -68,7 +68,7 @@ test('sets a newer reading against the model in the catalogue, figure by figure'
   const resistance = approved!.changes.find(({ what }) => what === 'Resistance R')!;
   expect(resistance.before).toBeCloseTo(2.2, 3);
   expect(resistance.after).toBeCloseTo(2.4, 3);
-  expect(approved!.changes.map(({ what }) => what)).toContain('Qmax at 27 °C');
+  expect(approved!.changes.map(({ what }) => what)).toContain('Qmax at 27\u00A0°C');
   await approves(librarian, second.id);
   expect((await evidence(librarian, second.id)).approved).toBeNull();
 });

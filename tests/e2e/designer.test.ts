@@ -43,7 +43,8 @@ beforeAll(async () => {
 
 const addressOf = (page: Page) => new URL(page.url());
 const param = (page: Page, name: string) => addressOf(page).searchParams.get(name);
-const parts = (page: Page) => page.getByRole('region', { name: 'Modules', exact: true }).getByRole('rowheader').allTextContents();
+const parts = (page: Page) =>
+  page.getByRole('region', { name: 'Modules', exact: true }).getByRole('rowheader').getByRole('link').allTextContents();
 const overflow = (page: Page) => page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
 /** Plain spaces in place of those that do not break. */
 const plainSpaces = (text: string | null) => (text ?? '').replace(/[\u00A0\u202F]/g, ' ');

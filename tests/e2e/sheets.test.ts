@@ -166,7 +166,7 @@ describe('pages of a sheet', () => {
     expect(await row('d01.png').innerText()).toContain('is page 1');
     expect(await row('d05.jpg').innerText()).toContain('is page 2');
     expect(await row('notes.txt').innerText()).toContain('This file is not a picture.');
-    expect(await row('huge.png').innerText()).toContain('The file is larger than 30 MB.');
+    expect(await row('huge.png').innerText()).toContain('The file is larger than 30\u00A0MB.');
     expect(await pages(page).count()).toBe(2);
     await page.getByRole('button', { name: 'Clear the list' }).click();
     expect(await files(page).count()).toBe(0);
@@ -249,7 +249,7 @@ describe('pages of a sheet', () => {
     await page.getByRole('button', { name: 'Take it off' }).click();
     await page.getByText('The page is off the sheet.').waitFor();
     expect(await pages(page).count()).toBe(0);
-    expect(await focused(page)).toBe('Pages');
+    await expect.poll(() => focused(page)).toBe('Pages');
   });
 
   test('a page on which a reading stands stays, and it is said why', async () => {

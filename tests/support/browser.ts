@@ -1,17 +1,8 @@
-import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
+import type { Browser, BrowserContext, Page } from 'playwright-core';
 import { afterAll, afterEach, beforeAll, expect, inject } from 'vitest';
+import { launch } from './browser-program';
 
-const QUIET = [
-  '--no-sandbox',
-  '--disable-gpu',
-  '--disable-quic',
-  '--no-first-run',
-  '--disable-background-networking',
-  '--disable-component-update',
-  '--disable-sync',
-];
-
-export const launch = (): Promise<Browser> => chromium.launch({ executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: QUIET });
+export { launch };
 
 /** Two animation frames: Konva redraws its hit graph on the next one. */
 export const settle = (page: Page) =>
@@ -24,6 +15,18 @@ export interface Visitor {
 
 /** Problem answers that a test provokes on purpose show up on the console; everything else there fails the test. */
 const EXPECTED = /the server responded with a status of 4\d\d/;
+
+/** Hears what a page complains about on the console, throws, or fetches from elsewhere. */
+export function listenTo(page: Page, complain: (complaint: string) => void): void {
+  const base = inject('baseUrl');
+  page.on('pageerror', (error) => complain(`error on the page: ${error.message}`));
+  page.on('console', (message) => {
+    if (message.type() === 'error' && !EXPECTED.test(message.text())) complain(`console: ${message.text()}`);
+  });
+  page.on('request', (request) => {
+    if (/^https?:/.test(request.url()) && !request.url().startsWith(base)) complain(`left the site: ${request.url()}`);
+  });
+}
 
 /**
  * A browser for a test file. `visit` opens a fresh person's window; whatever its pages complain about on the
@@ -58,13 +61,7 @@ export function useBrowser() {
       });
       contexts.push(context);
       const page = await context.newPage();
-      page.on('pageerror', (error) => complaints.push(`error on the page: ${error.message}`));
-      page.on('console', (message) => {
-        if (message.type() === 'error' && !EXPECTED.test(message.text())) complaints.push(`console: ${message.text()}`);
-      });
-      page.on('request', (request) => {
-        if (/^https?:/.test(request.url()) && !request.url().startsWith(base)) complaints.push(`left the site: ${request.url()}`);
-      });
+      listenTo(page, (complaint) => complaints.push(complaint));
       return { page, context };
     },
   };

@@ -6,5 +6,6 @@ export * from './parts';
 export * from './people';
 export * from './readings';
 export * from './sentences';
+export * from './today';
 export { type Operation } from './operation';
 export { operations, type OperationName } from './operations';

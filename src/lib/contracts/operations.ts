@@ -32,6 +32,7 @@ import {
   saveBody,
   stateAnswer,
 } from './readings';
+import { today } from './today';
 
 const made = z.strictObject({ id: rowId });
 
@@ -103,6 +104,16 @@ export const operations = {
     may: 'account.use',
     body: changePasswordBody,
     status: 204,
+  }),
+
+  today: operation({
+    method: 'GET',
+    path: '/api/today',
+    tag: 'account',
+    summary: 'What waits for oneself, and what was approved of late',
+    may: 'account.use',
+    status: 200,
+    answer: today,
   }),
 
   vendors: operation({

@@ -1,10 +1,8 @@
 import { z } from 'zod';
 import { idParams, instant, isoDate, line, printedDate, readingState, rowId, sha256 } from './common';
 
-const outOfRange = (what: string, unit: string, min: number, max: number) =>
-  `${what} must be between ${min} and ${max} ${unit}.`.replace(' .', '.');
 const between = (what: string, unit: string, min: number, max: number) => {
-  const sentence = outOfRange(what, unit, min, max);
+  const sentence = `${what} must be between ${min} and ${max}\u00A0${unit}.`;
   return z.number(`${what} must be a number, like 2.5.`).min(min, sentence).max(max, sentence);
 };
 

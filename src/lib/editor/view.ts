@@ -65,15 +65,19 @@ export const view = (document: BenchDocument, session: Session): Scene => {
   };
 };
 
-interface Candidate {
-  readonly selection: Selection;
-  readonly px: Px;
-}
-
-const candidates = (chart: BenchChart, session: Session): readonly Candidate[] => {
-  if (session.station === 'frame') return chart.marks.map(({ id, px }) => ({ selection: { kind: 'mark', mark: id }, px }));
-  if (session.station !== 'curves' && session.station !== 'model') return [];
-  return chart.curves.flatMap((curve) => curve.points.map((px, point) => ({ selection: { kind: 'point', curve: curve.id, point }, px })));
+/** The candidate with the least cost within reach, asked for one after the other; made for being asked at every move of a pointer. */
+const nearest = (px: Px, radius: number) => {
+  let best: Selection | null = null;
+  let least = Infinity;
+  return {
+    offer: (at: Px, handicap: number, selection: () => Selection) => {
+      const away = Math.hypot(at[0] - px[0], at[1] - px[1]);
+      if (away > radius || away + handicap >= least) return;
+      least = away + handicap;
+      best = selection();
+    },
+    best: (): Selection | null => best,
+  };
 };
 
 /**
@@ -81,16 +85,15 @@ const candidates = (chart: BenchChart, session: Session): readonly Candidate[] =
  * hand wins over a point of another that is nearer by less than a third of the radius.
  */
 export const handleAt = (chart: BenchChart | null, session: Session, px: Px, radius: number): Selection | null => {
-  if (!chart) return null;
-  const cost = ({ selection, px: at }: Candidate) => {
-    const away = Math.hypot(at[0] - px[0], at[1] - px[1]);
-    const elsewhere = selection.kind === 'point' && session.curve !== null && selection.curve !== session.curve;
-    return { away, cost: away + (elsewhere ? radius / 3 : 0) };
-  };
-  let best: { readonly selection: Selection; readonly cost: number } | null = null;
-  for (const candidate of candidates(chart, session)) {
-    const { away, cost: total } = cost(candidate);
-    if (away <= radius && (!best || total < best.cost)) best = { selection: candidate.selection, cost: total };
+  const search = nearest(px, radius);
+  if (chart && session.station === 'frame') {
+    for (const { id, px: at } of chart.marks) search.offer(at, 0, () => ({ kind: 'mark', mark: id }));
   }
-  return best?.selection ?? null;
+  if (chart && (session.station === 'curves' || session.station === 'model')) {
+    for (const { id, points } of chart.curves) {
+      const handicap = session.curve === null || session.curve === id ? 0 : radius / 3;
+      points.forEach((at, point) => search.offer(at, handicap, () => ({ kind: 'point', curve: id, point })));
+    }
+  }
+  return search.best();
 };

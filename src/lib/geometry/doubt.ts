@@ -12,7 +12,7 @@ const LARGE_RESIDUAL_PX = 3;
  */
 export function frameDoubt(frame: Frame, marks: readonly Mark[]): string | null {
   if (frame.residualPx !== null && frame.residualPx > LARGE_RESIDUAL_PX) {
-    return `The marks lie ${frame.residualPx.toFixed(1)} px from the lines of their values: check the values typed and the places of the marks.`;
+    return `The marks lie ${frame.residualPx.toFixed(1)}\u00A0px from the lines of their values: check the values typed and the places of the marks.`;
   }
   const projection = projectionOfFrame(frame);
   const sizes = marks.map(({ px }) => denominatorAt(projection, [px[0] - frame.origin[0], px[1] - frame.origin[1]] satisfies Px));

@@ -6,7 +6,7 @@ const LARGEST = 1e9;
 const TOO_LARGE = { error: 'No chart reads so far: give a number between −1 000 000 000 and 1 000 000 000.' };
 const number = z.number({ error: 'Give a number.' }).min(-LARGEST, TOO_LARGE).max(LARGEST, TOO_LARGE);
 const positive = number.positive({ error: 'Give a number above zero.' });
-const celsius = number.min(-273.15, { error: 'Nothing is colder than −273.15 °C.' });
+const celsius = number.min(-273.15, { error: 'Nothing is colder than −273.15\u00A0°C.' });
 const name = z
   .string({ error: 'Give some text.' })
   .trim()

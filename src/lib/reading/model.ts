@@ -1,6 +1,6 @@
 import { impliedRatings, moduleOfFit, type FormChoice, type ModuleFit, type Observation } from '@/lib/fit';
 import { moduleOfForm, temperatureCoefficients, type ModuleConstants, type ThermoelectricModule } from '@/lib/module';
-import { kelvin, toCelsius } from '@/lib/units';
+import { kelvin, REFERENCE_KELVIN, toCelsius } from '@/lib/units';
 import type { ReadingDocument, ReadingModule } from './document';
 import type { DerivedRatings, ReadingModel, Validity } from './result';
 import { tidyAll } from './tidy';
@@ -32,10 +32,10 @@ function validityOf(fit: ModuleFit, observations: readonly Observation[]): Valid
   };
 }
 
-/** Hot sides that charts and ratings name, each once, coldest first. */
+/** Hot sides that charts and ratings name, each once, coldest first; the reference temperature where a sheet names only cold sides. */
 function hotSidesOf({ charts, module }: ReadingDocument): number[] {
   const named = [...charts, ...(module.rated ?? [])].flatMap(({ hotSideC }) => hotSideC ?? []);
-  return [...new Set(named)].sort((a, b) => a - b);
+  return named.length > 0 ? [...new Set(named)].sort((a, b) => a - b) : [toCelsius(REFERENCE_KELVIN)];
 }
 
 function derivedAt(fit: ModuleFit, hotSideC: number): DerivedRatings {

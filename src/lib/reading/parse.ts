@@ -62,7 +62,7 @@ function predictionFault({ hotSideC, coldSideC, deltaT, I, V }: ReadingPredictio
   const coldest = coldSideC ?? (hotSideC ?? 0) - deltaT;
   const warmest = hotSideC ?? (coldSideC ?? 0) + deltaT;
   return Math.min(coldest, warmest) <= -273.15
-    ? { path: `${path}.deltaT`, message: 'With this difference one side would be colder than −273.15 °C.' }
+    ? { path: `${path}.deltaT`, message: 'With this difference one side would be colder than −273.15\u00A0°C.' }
     : null;
 }
 

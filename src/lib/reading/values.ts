@@ -53,7 +53,10 @@ export function unitFault(
   if (ratingAt(module, chart, of) !== undefined) return null;
   return chart.hotSideC === undefined
     ? { key: 'of', message: 'Ratings are printed for a hot side, so only a chart with hotSideC can be in shares of one.' }
-    : { key: 'of', message: `The module has no ${of} rated at ${chart.hotSideC} °C: add it to "rated", or give the axis in its own unit.` };
+    : {
+        key: 'of',
+        message: `The module has no ${of} rated at ${chart.hotSideC}\u00A0°C: add it to "rated", or give the axis in its own unit.`,
+      };
 }
 
 /** The conversion of an axis or the family of a chart that has no {@link unitFault}. */

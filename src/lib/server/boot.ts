@@ -1,8 +1,8 @@
 import { closeSync, fsyncSync, mkdirSync, openSync, renameSync, rmSync } from 'node:fs';
 import path from 'node:path';
-import { closeDatabase, countPeople, migrate, openDatabase, selfCheck, useRollbackJournal } from '@db';
+import { closeDatabase, countPeople, findPerson, migrate, openDatabase, selfCheck, useRollbackJournal } from '@db';
 import { config } from './config';
-import { DEMO_PASSWORD, DEMO_PEOPLE, seedPeople } from './demo/people';
+import { DEMO_PASSWORD, DEMO_PEOPLE, demoPersonId, seedPeople } from './demo/people';
 import { seedSamples } from './demo/seed';
 import { deliverMail, requeueMailInHand } from './mail';
 
@@ -63,6 +63,15 @@ async function replaceByDemo(file: string, what: 'whole' | 'people'): Promise<vo
   await openWhole(file);
 }
 
+/** Everybody knows their password: outside demo mode a database that holds them must not be served. */
+async function refuseDemoPeople(): Promise<void> {
+  const there = await Promise.all(DEMO_PEOPLE.map((person) => findPerson(demoPersonId(person))));
+  if (!there.some((person) => person && !person.disabled)) return;
+  throw new Error(
+    'This database holds demo people, whose password is well known, so it is not served with COUPLET_DEMO=off. Set COUPLET_DATA to an empty folder to start afresh.',
+  );
+}
+
 /** Before the port opens: settings, folders, migrations, the database's self-check, and demo data where it belongs. */
 export async function boot(): Promise<BootReport> {
   const settings = config();
@@ -71,6 +80,7 @@ export async function boot(): Promise<BootReport> {
     const migrated = await openWhole(settings.databaseFile);
     await requeueMailInHand();
     const empty = (await countPeople()) === 0;
+    if (!settings.demo) await refuseDemoPeople();
     if (empty && settings.demo) await replaceByDemo(settings.databaseFile, settings.demoData);
     return {
       address: settings.publicAddress.origin,

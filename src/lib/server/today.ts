@@ -1,28 +1,10 @@
-import { decisionsOf, findReading, listReadings, recentDecisions } from '@db';
+import { decisionsOf, findReading, listReadings, recentApprovals } from '@db';
 import { can } from '@/lib/access';
-import type { QueueItem, ReadingRow } from '@/lib/contracts';
+import type { Approval, Today } from '@/lib/contracts';
 import { moduleName } from './parts';
 import type { SignedInPerson } from './people';
 import { toReadingRow } from './readings';
 import { reviewQueue } from './review';
-
-export interface Approval {
-  readonly readingId: number;
-  readonly moduleId: number;
-  readonly module: string;
-  readonly vendor: string;
-  readonly by: string;
-  readonly at: string;
-}
-
-/** What waits for a person, and what was approved of late. Lists stay empty for what the roles do not bring. */
-export interface Today {
-  readonly drafts: readonly ReadingRow[];
-  readonly returned: readonly (ReadingRow & { readonly reason: string })[];
-  readonly handedIn: readonly ReadingRow[];
-  readonly toReview: readonly QueueItem[];
-  readonly approvals: readonly Approval[];
-}
 
 const RECENT = 8;
 
@@ -40,8 +22,8 @@ async function ownWork(actor: SignedInPerson) {
   };
 }
 
-async function recentApprovals(): Promise<Approval[]> {
-  const decisions = await recentDecisions(['approved'], RECENT);
+async function approvals(): Promise<Approval[]> {
+  const decisions = await recentApprovals(RECENT);
   const readings = await Promise.all(decisions.map((decision) => findReading(decision.readingId)));
   return decisions.flatMap((decision, at) => {
     const reading = readings[at];
@@ -60,7 +42,8 @@ async function recentApprovals(): Promise<Approval[]> {
   });
 }
 
+/** What waits for a person, by their roles, and what was approved of late and stands still. */
 export async function todayFor(actor: SignedInPerson): Promise<Today> {
   const toReview = can(actor, 'review.see') ? await reviewQueue(actor) : [];
-  return { ...(await ownWork(actor)), toReview, approvals: await recentApprovals() };
+  return { ...(await ownWork(actor)), toReview, approvals: await approvals() };
 }

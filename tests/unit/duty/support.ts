@@ -50,12 +50,14 @@ export const anyCandidate: fc.Arbitrary<Named> = fc
     return candidate({ name, maxTemperatureC, allowedCurrentA, model: { parameters, covariance, tolerancePercent } });
   });
 
+/** Nobody writes −0 °C: it is read as 0. */
+const withoutMinusZero = (value: number) => value + 0;
+
 export const anyDuty: fc.Arbitrary<Duty> = fc.record(
   {
     heatW: fc.double({ min: 0.1, max: 200, noNaN: true }),
-    // adding 0 turns −0, which no form can show, into 0
-    coldFaceC: fc.double({ min: -60, max: 60, noNaN: true }).map((celsius) => celsius + 0),
-    hotFaceC: fc.double({ min: 0, max: 110, noNaN: true }).map((celsius) => celsius + 0),
+    coldFaceC: fc.double({ min: -60, max: 60, noNaN: true }).map(withoutMinusZero),
+    hotFaceC: fc.double({ min: 0, max: 110, noNaN: true }),
     maxCurrentA: fc.double({ min: 0.1, max: 25, noNaN: true }),
     maxVoltageV: fc.double({ min: 0.5, max: 48, noNaN: true }),
   },

@@ -213,7 +213,7 @@ describe('a doubt about a frame', () => {
 
   it('is raised when the marks lie far from their lines', () => {
     const frame = frameOf(typed(60), linear, 'upright');
-    expect(frameDoubt(frame, typed(60))).toMatch(/^The marks lie \d+\.\d px from the lines of their values/);
+    expect(frameDoubt(frame, typed(60))).toMatch(/^The marks lie \d+\.\d\u00A0px from the lines of their values/);
   });
 
   it('is not raised for a good frame or a fair photograph', () => {

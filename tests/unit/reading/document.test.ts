@@ -189,7 +189,7 @@ describe('a fault is refused at its place with a sentence', () => {
       'a prediction below absolute zero',
       'predict[0].deltaT',
       plainDocument(undefined, { predict: [{ hotSideC: 30, deltaT: 400, I: 1 }] }),
-      /colder than −273\.15 °C/,
+      /colder than −273\.15\u00A0°C/,
     ],
   ])('%s', (_, path, json, message) => {
     const refusal = refusalOf(json);
@@ -266,11 +266,11 @@ describe('the unit of an axis', () => {
       withX({ quantity: 'deltaT', unit: '1', of: 'imaxA' }, rated({ hotSideC: 27, imaxA: 5 })),
       /deltaT is not a share of imaxA/,
     ],
-    ['charts[0].x.of', withX({ quantity: 'deltaT', unit: '1', of: 'dTmaxK' }), /no dTmaxK rated at 27 °C/],
+    ['charts[0].x.of', withX({ quantity: 'deltaT', unit: '1', of: 'dTmaxK' }), /no dTmaxK rated at 27\u00A0°C/],
     [
       'charts[0].x.of',
       withX({ quantity: 'deltaT', unit: '1', of: 'dTmaxK' }, rated({ hotSideC: 50, dTmaxK: 70 })),
-      /no dTmaxK rated at 27 °C/,
+      /no dTmaxK rated at 27\u00A0°C/,
     ],
     [
       'charts[0].x.of',

@@ -42,7 +42,7 @@ test('a hot side left wholly empty is not sent', () => {
 
 test('a problem of a rating is told at its own block, whatever is empty before it', () => {
   const ratings = [emptyRating(1), { ...emptyRating(4), hotSideC: 50, imaxA: 5000 }];
-  expect(problemsOf({ ...draft, ratings })).toEqual({ 'ratings[4].imaxA': 'Imax must be between 0.001 and 1000 A.' });
+  expect(problemsOf({ ...draft, ratings })).toEqual({ 'ratings[4].imaxA': 'Imax must be between 0.001 and 1000\u00A0A.' });
 });
 
 test('ratings without their hot side, and a hot side without ratings, are asked for', () => {

@@ -1,4 +1,4 @@
-import { lazy, Suspense, useMemo, useState, useSyncExternalStore } from 'react';
+import { lazy, Suspense, useCallback, useMemo, useState, useSyncExternalStore } from 'react';
 import { ErrorBoundary } from '@/components/ui/ErrorBoundary';
 import { Toasts, useToasts } from '@/components/ui/Toast';
 import type { ReadingView } from '@/lib/contracts';
@@ -19,7 +19,8 @@ import { FrameStation } from './stations/FrameStation';
 import { HandInStation, Returned } from './stations/HandInStation';
 import type { Overlay } from './stations/ModelStation';
 import { makeTools } from './state/make-tools';
-import { ToolsContext, useBench, useChart, useSession, useTools } from './state/tools';
+import type { BenchState } from './state/store';
+import { ToolsContext, useBench, useChart, useTools } from './state/tools';
 import { useSaving, useUndoKeys } from './state/use-lifetime';
 
 const ModelStation = lazy(() => import('./stations/ModelStation').then((room) => ({ default: room.ModelStation })));
@@ -47,10 +48,10 @@ export function Bench({ reading, personId }: BenchProps) {
 }
 
 /** Whatever stopped the bench, the draft is kept in the browser and sent to the server once more. */
-const keepNow = async ({ unsaved, saver, store, reading }: ReturnType<typeof makeTools>) => {
+const keepNow = async ({ unsaved, saver, store, reading, tab }: ReturnType<typeof makeTools>) => {
   if (!saver.unsaved()) return;
   const document = store.get().history.present;
-  await unsaved.keep({ readingId: reading.id, version: saver.confirmedVersion(), document, at: new Date().toISOString() });
+  await unsaved.keep({ readingId: reading.id, tab, version: saver.confirmedVersion(), document, at: new Date().toISOString() });
   await saver.flush();
 };
 
@@ -65,17 +66,20 @@ function Announcements() {
 }
 
 const NO_LINES: readonly FittedLine[] = [];
+const stationOf = ({ session }: BenchState) => session.station;
 
 function Desk() {
   const { reading } = useTools();
-  const { station } = useSession();
+  const station = useBench(stationOf);
   const [adding, setAdding] = useState(false);
   const [helping, setHelping] = useState(false);
   const [overlay, setOverlay] = useState<Overlay>({ shown: true, balance: 50 });
   const { toasts, show, close } = useToasts();
   const model = useModel(station === 'model' || station === 'hand-in');
   const fitted = useFitted(model.answer, station === 'model' && overlay.shown);
-  const requests = { help: () => setHelping(true), editNumbers };
+  const help = useCallback(() => setHelping(true), []);
+  const add = useCallback(() => setAdding(true), []);
+  const toolbar = useMemo(() => <StageToolbar onHelp={help} />, [help]);
   const over = station === 'model' && overlay.shown ? overlay.balance : null;
   return (
     <div className="bench" data-station={station}>
@@ -83,16 +87,17 @@ function Desk() {
       {reading.reason !== null && station !== 'hand-in' && <Returned reason={reading.reason} />}
       <div className="bench-grid">
         <BenchStage
-          {...requests}
+          help={help}
+          editNumbers={editNumbers}
           fitted={fitted}
           pictureOpacity={over === null ? 1 : Math.min(1, 2 - over / 50)}
           fittedOpacity={over === null ? 1 : Math.min(1, over / 50)}
-          toolbar={<StageToolbar onHelp={requests.help} />}
+          toolbar={toolbar}
         />
         <aside className="bench-side" aria-label="Station">
           <StationPanel model={model} overlay={overlay} onOverlay={setOverlay} />
         </aside>
-        <ChartList onAdd={() => setAdding(true)} />
+        <ChartList onAdd={add} />
       </div>
       <AddChart isOpen={adding} onClose={() => setAdding(false)} />
       <KeyHelp isOpen={helping} onClose={() => setHelping(false)} />
@@ -109,7 +114,7 @@ interface StationPanelProps {
 
 function StationPanel({ model, overlay, onOverlay }: StationPanelProps) {
   const { frozen } = useTools();
-  const { station } = useSession();
+  const station = useBench(stationOf);
   const chart = useChart();
   if (station === 'model') {
     return (

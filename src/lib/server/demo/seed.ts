@@ -69,12 +69,24 @@ async function makeDraft(owner: SignedInPerson, stock: Stock, sample: Sample, ch
   return { id, version };
 }
 
-async function makeHandedIn(owner: SignedInPerson, stock: Stock, sample: Sample, note: string, change?: (draft: BenchDocument) => BenchDocument) {
+async function makeHandedIn(
+  owner: SignedInPerson,
+  stock: Stock,
+  sample: Sample,
+  note: string,
+  change?: (draft: BenchDocument) => BenchDocument,
+) {
   const { id, version } = await makeDraft(owner, stock, sample, change);
   return { id, version: (await handIn(owner, id, version, note)).version };
 }
 
-async function makeApproved(owner: SignedInPerson, librarian: SignedInPerson, stock: Stock, sample: Sample, change?: (draft: BenchDocument) => BenchDocument) {
+async function makeApproved(
+  owner: SignedInPerson,
+  librarian: SignedInPerson,
+  stock: Stock,
+  sample: Sample,
+  change?: (draft: BenchDocument) => BenchDocument,
+) {
   const { id, version } = await makeHandedIn(owner, stock, sample, '', change);
   return { id, version: (await approve(librarian, id, version)).version };
 }

@@ -42,7 +42,10 @@ export function endpoint<O extends Operation>(operation: O, work: (call: Call<O>
     try {
       return answer(operation, await work(await readCall(operation, context)));
     } catch (error) {
-      if (error instanceof Refusal) return problemResponse(error);
+      if (error instanceof Refusal) {
+        if (error.status === 403) log.info({ path: operation.path, method: operation.method, who: context.locals.actor?.id }, 'refused');
+        return problemResponse(error);
+      }
       log.error({ err: error, path: operation.path, method: operation.method }, 'unexpected error');
       return problemResponse(new Refusal(500, 'unexpected', 'Something went wrong on our side, and nothing of this was saved. Try again.'));
     }
@@ -96,8 +99,7 @@ async function readJson(request: Request): Promise<unknown> {
   const type = request.headers.get('content-type')?.split(';')[0]?.trim().toLowerCase();
   if (type !== 'application/json') throw new Refusal(415, 'not-json', 'Send the body as application/json.');
   if (Number(request.headers.get('content-length') ?? 0) > LARGEST_JSON_BYTES) throw tooLarge();
-  const text = await request.text();
-  if (text.length > LARGEST_JSON_BYTES) throw tooLarge();
+  const text = await readText(request);
   try {
     return JSON.parse(text);
   } catch {
@@ -105,7 +107,19 @@ async function readJson(request: Request): Promise<unknown> {
   }
 }
 
-const tooLarge = () => new Refusal(413, 'too-large', 'The body is larger than 8 MB.');
+/** The body as text, read no further than the limit whatever its length says. */
+async function readText(request: Request): Promise<string> {
+  const parts: Uint8Array[] = [];
+  let bytes = 0;
+  for await (const part of request.body ?? []) {
+    bytes += part.byteLength;
+    if (bytes > LARGEST_JSON_BYTES) throw tooLarge();
+    parts.push(part);
+  }
+  return Buffer.concat(parts).toString('utf8');
+}
+
+const tooLarge = () => new Refusal(413, 'too-large', 'The body is larger than 8\u00A0MB.');
 
 function requireVersion(request: Request): number {
   const tag = VERSION_TAG.exec(request.headers.get('if-match') ?? '');

@@ -1,5 +1,5 @@
 import type { MiddlewareHandler } from 'astro';
-import { config } from '../config';
+import { config, isLoopback } from '../config';
 import { notAllowed } from '../refusal';
 import { problemResponse } from './problem';
 
@@ -8,7 +8,7 @@ const SAFE = new Set(['GET', 'HEAD', 'OPTIONS']);
 /** Hosts that people may reach this server by: the public address, and in demo mode any loopback name. */
 function isOurs(origin: URL, host: string): boolean {
   const { publicAddress, demo } = config();
-  return origin.host === publicAddress.host || (demo && origin.host === host);
+  return origin.host === publicAddress.host || (demo && isLoopback(origin.hostname) && origin.host === host);
 }
 
 /**

@@ -28,11 +28,9 @@ async function deliverDue(): Promise<void> {
     for (const mail of batch) await deliver(mail);
 }
 
-/** Sends what is due. Calls while one runs share it; what was queued meanwhile is taken by the next look. */
+/** Sends what is due. A call while one runs makes it look once more at its end, so nothing queued meanwhile waits. */
 export function deliverMail(): Promise<void> {
-  running ??= deliverDue()
-    .catch((error: unknown) => log.error({ err: error }, 'mail queue'))
-    .finally(() => (running = undefined));
+  running = (running ?? Promise.resolve()).then(deliverDue).catch((error: unknown) => log.error({ err: error }, 'mail queue'));
   return running;
 }
 

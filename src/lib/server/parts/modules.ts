@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from 'node:util';
 import {
   addTrail,
   createModule,
@@ -65,6 +66,13 @@ async function requireMayEdit(actor: SignedInPerson, id: number): Promise<void> 
     throw notAllowed('A reading of this module was handed in, so its identity and ratings are now a librarian’s to change.');
 }
 
+const bySide = (ratings: ModuleBody['ratings']) => [...ratings].sort((a, b) => a.hotSideC - b.hotSideC);
+
+/** Whether a body says what is stored already. */
+function isSame({ id: _id, version: _version, vendor, ratings, ...identity }: ModuleRecord, body: ModuleBody): boolean {
+  return isDeepStrictEqual({ ...identity, vendor: vendor.name, ratings: bySide([...ratings]) }, { ...body, ratings: bySide(body.ratings) });
+}
+
 /** Changes identity and ratings of a module, over the named version only. */
 export async function changeModule(actor: SignedInPerson, id: number, version: number, body: ModuleBody): Promise<ModuleRecord> {
   await inTransaction(async () => {
@@ -73,6 +81,7 @@ export async function changeModule(actor: SignedInPerson, id: number, version: n
     const vendor = await vendorNamed(body.vendor);
     const there = await findModuleByIdentity(vendor.id, body.partNumber, body.variant, id);
     if (there) throw alreadyThere(there);
+    if (isSame(before, body)) return; // a repeat whose answer was lost
     if (!(await updateModule(id, version, vendor.id, body))) throw lostRace(toModuleView(before));
     await raiseCounter('catalogue');
     await addTrail({ userId: actor.id, action: 'changed module', object: `module/${id}`, detail: { before: toModuleView(before) } });

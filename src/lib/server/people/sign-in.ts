@@ -24,7 +24,7 @@ async function takeATry(limiter: RateLimiterMemory, key: string): Promise<void> 
   } catch (error) {
     if (!(error instanceof RateLimiterRes)) throw error;
     const seconds = Math.max(1, Math.ceil(error.msBeforeNext / 1000));
-    throw new Refusal(429, 'too-many-tries', `Too many tries. Wait ${seconds} s and try again.`, {
+    throw new Refusal(429, 'too-many-tries', `Too many tries. Wait ${seconds}\u00A0s and try again.`, {
       headers: { 'Retry-After': String(seconds) },
     });
   }
@@ -47,7 +47,7 @@ export async function signIn(attempt: {
     await addTrail({ userId: person?.id ?? null, action: 'sign-in refused' });
     throw wrong();
   }
-  await byAccount.delete(account);
+  await Promise.all([byAccount.delete(account), byAddress.reward(attempt.address)]); // only wrong tries count
   if (attempt.previous) await lucia().invalidateSession(attempt.previous);
   await deleteExpiredSessions(new Date());
   const session = await lucia().createSession(person.id, { agent: attempt.agent.slice(0, LONGEST_AGENT) });

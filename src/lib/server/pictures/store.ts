@@ -15,6 +15,13 @@ async function syncFolder(folder: string): Promise<void> {
   }
 }
 
+/** Makes a folder so that it stays: every folder that got a new entry is synced. */
+async function makeFolder(folder: string): Promise<void> {
+  const first = await mkdir(folder, { recursive: true });
+  if (first === undefined) return;
+  for (let made = folder; made.length >= first.length; made = path.dirname(made)) await syncFolder(path.dirname(made));
+}
+
 /**
  * Keeps bytes under their own SHA-256 and answers when they are on the disk: written beside their place, synced,
  * renamed, the folder synced. The same bytes again are only looked at. A row may name them after this, not before.
@@ -24,7 +31,7 @@ export async function keepFile(bytes: Uint8Array, sha256: string): Promise<void>
   const there = await stat(place).catch(() => null);
   if (there?.size === bytes.byteLength) return;
   const folder = path.dirname(place);
-  await mkdir(folder, { recursive: true });
+  await makeFolder(folder);
   const draft = `${place}.${randomBytes(6).toString('hex')}.part`;
   const handle = await open(draft, 'wx', 0o640);
   try {

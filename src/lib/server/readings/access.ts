@@ -1,15 +1,14 @@
-import { findReading, type ReadingRecord, type ReadingState } from '@db';
+import { findReading, type ReadingRecord } from '@db';
 import { can, type Access, type Action } from '@/lib/access';
 import { requireCan, type SignedInPerson } from '../people';
 import { notFound } from '../refusal';
-
-const SETTLED = new Set<ReadingState>(['approved', 'superseded', 'withdrawn']);
+import { isSettled } from '../settled';
 
 /** What the matrix needs to know about a reading. */
 export const accessOf = (reading: ReadingRecord): Access => ({
   ownerId: reading.owner.id,
   editorIds: reading.editorIds,
-  approved: SETTLED.has(reading.state),
+  approved: isSettled(reading.state),
 });
 
 /** A reading this person may see; one that may not be seen is answered as one that is not there. */

@@ -1,3 +1,4 @@
+import pLimit from 'p-limit';
 import { findPictures, type PictureRecord, type ReadingRecord } from '@db';
 import { toReadingDocument, type BenchDocument, type Conversion } from '@/lib/editor';
 import {
@@ -52,6 +53,9 @@ export interface FittedDraft {
   readonly pixelsSha256: readonly string[];
 }
 
+/** One fit at a time: each holds the process while it runs. */
+const oneFit = pLimit(1);
+
 /**
  * Reads and fits the finished charts of a draft, as the command would; saves nothing. What was handed in is fitted
  * again with the module as it was then: give it.
@@ -69,7 +73,7 @@ export async function fitDraft(
   const byName = new Map(pictures.map((picture) => [nameOf(picture.id), picture]));
   const parsed = parseReadingDocument(document);
   if (!parsed.ok) throw wrongInput({ [parsed.path]: parsed.message }, parsed.message);
-  const read = await readOrRefuse(parsed.document, byName);
+  const read = await oneFit(() => readOrRefuse(parsed.document, byName));
   return { conversion, document, read, pixelsSha256: document.charts.map((chart) => byName.get(chart.image)?.pixelsSha256 ?? '') };
 }
 

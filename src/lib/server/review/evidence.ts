@@ -27,7 +27,7 @@ function changes(before: ReadingModel | null, after: ReadingModel | null): Chang
   const ratings = (after?.derived ?? []).flatMap((now) => {
     const then = before?.derived.find((row) => row.hotSideC === now.hotSideC);
     const row = (what: string, key: 'qmaxW' | 'dTmaxK' | 'vmaxV' | 'imaxLargestDeltaT', unit: string) => ({
-      what: `${what} at ${now.hotSideC} °C`,
+      what: `${what} at ${now.hotSideC}\u00A0°C`,
       unit,
       before: then?.[key].value ?? null,
       after: now[key].value,

@@ -89,6 +89,7 @@ function obstacle(fitted: Awaited<ReturnType<typeof fitDraft>>): string | null {
 export async function handIn(actor: SignedInPerson, id: number, version: number, note: string): Promise<StateAnswer> {
   const before = await readingTo('reading.handIn', actor, id);
   requireState(before, 'draft', 'returned');
+  if (before.version !== version) throw lostRace(await readingView(actor, id)); // what is fitted is what was named
   const fitted = await fitDraft(before, JSON.parse(before.document) as BenchDocument);
   const why = obstacle(fitted);
   if (why || !fitted.read || !fitted.document) throw wrongInput({ document: why ?? 'This draft cannot be read.' });

@@ -1,18 +1,17 @@
-import { findPicture, readingStatesWithPicture, type PictureRecord } from '@db';
+import { findPicture, readingStatesBesidePicture, type PictureRecord } from '@db';
 import { can } from '@/lib/access';
 import type { SignedInPerson } from '../people';
 import { readKept } from '../pictures/store';
 import { thumbnailOf } from '../pictures/thumbnail';
+import { isSettled } from '../settled';
 import { notFound } from '../refusal';
-
-const SETTLED = new Set(['approved', 'superseded', 'withdrawn']);
 
 /** A picture this person may see; one that may not be seen is answered as one that is not there. */
 async function pictureFor(actor: SignedInPerson, id: number): Promise<PictureRecord> {
   const picture = await findPicture(id);
   if (!picture) throw notFound('picture');
   if (can(actor, 'sheet.see')) return picture;
-  const approved = (await readingStatesWithPicture(id)).some((state) => SETTLED.has(state));
+  const approved = (await readingStatesBesidePicture(id)).some(isSettled);
   if (!can(actor, 'sheet.see', { approved })) throw notFound('picture');
   return picture;
 }

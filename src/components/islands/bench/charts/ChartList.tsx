@@ -1,9 +1,10 @@
+import { memo } from 'react';
 import { Button } from '@/components/ui/Button';
 import { chartName, progressOf, type BenchChart } from '@/lib/editor';
 import { useBench, useTools, type BenchPage } from '../state/tools';
 
 /** The charts of the reading, each with its picture and how far it has come. */
-export function ChartList({ onAdd }: { onAdd: () => void }) {
+export const ChartList = memo(function ChartList({ onAdd }: { onAdd: () => void }) {
   const { pages, frozen } = useTools();
   const charts = useBench((state) => state.history.present.charts);
   return (
@@ -19,7 +20,7 @@ export function ChartList({ onAdd }: { onAdd: () => void }) {
       {!frozen && <Button onPress={onAdd}>Add a chart</Button>}
     </nav>
   );
-}
+});
 
 function ChartTile({ chart, page }: { chart: BenchChart; page: BenchPage | null }) {
   const { store } = useTools();

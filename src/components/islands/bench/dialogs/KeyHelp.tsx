@@ -2,8 +2,8 @@ import { Dialog } from '@/components/ui/Dialog';
 
 const KEYS: readonly (readonly [keys: readonly string[], does: string, also: string])[] = [
   [['←', '→', '↑', '↓'], 'move what is picked out, or the cross-hairs, by one pixel of the picture', 'arrow buttons beside the table'],
-  [['Shift + arrow'], 'by ten pixels', 'step “10 px”'],
-  [['Alt + arrow'], 'by a tenth of a pixel', 'step “0.1 px”'],
+  [['Shift + arrow'], 'by ten pixels', 'step “10\u00A0px”'],
+  [['Alt + arrow'], 'by a tenth of a pixel', 'step “0.1\u00A0px”'],
   [['Enter'], 'place at the cross-hairs; with something picked out, type its numbers', 'click; fields beside the table'],
   [['Insert'], 'place a point after the one picked out', 'click'],
   [['[', ']'], 'previous and next point or mark', 'buttons [ and ]'],

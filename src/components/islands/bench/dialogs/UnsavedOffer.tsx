@@ -16,7 +16,7 @@ export function UnsavedOffer() {
     let here = true;
     void unsaved.find(reading.id).then((found) => {
       if (!found || !here) return;
-      if (sameDocument(found.document, reading.document)) void unsaved.forget(reading.id);
+      if (sameDocument(found.document, reading.document)) void unsaved.forget(reading.id, 'whatever');
       else setWork(found);
     });
     return () => void (here = false);
@@ -24,7 +24,7 @@ export function UnsavedOffer() {
 
   if (!work) return null;
   const leave = () => {
-    void unsaved.forget(reading.id);
+    void unsaved.forget(reading.id, 'whatever');
     setWork(null);
   };
   const take = () => {

@@ -52,9 +52,11 @@ export function ModelFacts({ model }: { model: ReadingModel }) {
 const correlation = (covariance: readonly (readonly number[])[], i: number, j: number): number =>
   (covariance[i]?.[j] ?? NaN) / Math.sqrt((covariance[i]?.[i] ?? NaN) * (covariance[j]?.[j] ?? NaN));
 
+const SYMBOLS: Readonly<Record<string, string>> = { alpha: 'α' };
+
 /** Covariance and correlation of the parameters, and how the equations stood. */
 export function FitNumbers({ model, fit }: { model: ReadingModel; fit: ModelAnswer['fit'] }) {
-  const names = model.parameters.map(({ name }) => name);
+  const names = model.parameters.map(({ name }) => SYMBOLS[name] ?? name);
   const cell = (i: number, j: number) =>
     i === j
       ? formatUncertain(Math.sqrt(model.covariance[i]?.[i] ?? NaN), undefined).text
@@ -78,7 +80,7 @@ export function FitNumbers({ model, fit }: { model: ReadingModel; fit: ModelAnsw
           {model.parameters.map(({ name, unit }, i) => (
             <tr key={name}>
               <th scope="row">
-                {name} / {unitSymbol(unit)}
+                {SYMBOLS[name] ?? name} / {unitSymbol(unit)}
               </th>
               {names.map((other, j) => (
                 <td key={other} className="num">

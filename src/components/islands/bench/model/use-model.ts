@@ -24,13 +24,13 @@ interface Outcome {
 /** Fits the draft in hand on the server for as long as `wanted`, always the newest state, one request at a time. */
 export function useModel(wanted: boolean): ModelState {
   const { reading } = useTools();
-  const document = useBench((state) => state.history.present);
+  const document = useBench((state) => (wanted ? state.history.present : null));
   const [outcome, setOutcome] = useState<Outcome | null>(null);
   const [asked, setAsked] = useState(0);
-  const due = wanted && document.charts.length > 0 && outcome?.document !== document;
+  const due = document !== null && document.charts.length > 0 && outcome?.document !== document;
 
   useEffect(() => {
-    if (!due) return;
+    if (!due || !document) return;
     const control = new AbortController();
     const timer = setTimeout(() => {
       api
@@ -52,5 +52,5 @@ export function useModel(wanted: boolean): ModelState {
     setOutcome((before) => before && { ...before, document: { ...before.document } });
     setAsked((count) => count + 1);
   }, []);
-  return { answer: outcome?.answer ?? null, fault: outcome?.document === document ? outcome.fault : null, busy: due, again };
+  return { answer: outcome?.answer ?? null, fault: outcome && outcome.document === document ? outcome.fault : null, busy: due, again };
 }

@@ -1,4 +1,4 @@
-import { useEffect, useRef } from 'react';
+import { memo, useEffect, useRef } from 'react';
 import { Button } from '@/components/ui/Button';
 import { QuantityField } from '@/components/ui/QuantityField';
 import { curveName, type BenchChart, type BenchCurve } from '@/lib/editor';
@@ -40,14 +40,31 @@ export function CurveTable({ chart }: { chart: BenchChart }) {
       </thead>
       <tbody>
         {chart.curves.map((curve, index) => (
-          <CurveRow key={curve.id} chart={chart} curve={curve} style={index} inHand={curve.id === inHand} />
+          <CurveRow
+            key={curve.id}
+            chart={chart.id}
+            curve={curve}
+            name={curveName(chart, curve)}
+            head={familyHead(chart)}
+            style={index}
+            inHand={curve.id === inHand}
+          />
         ))}
       </tbody>
     </table>
   );
 }
 
-function CurveRow({ chart, curve, style, inHand }: { chart: BenchChart; curve: BenchCurve; style: number; inHand: boolean }) {
+interface CurveRowProps {
+  readonly chart: string;
+  readonly curve: BenchCurve;
+  readonly name: string;
+  readonly head: string;
+  readonly style: number;
+  readonly inHand: boolean;
+}
+
+const CurveRow = memo(function CurveRow({ chart, curve, name, head, style, inHand }: CurveRowProps) {
   const { store, frozen } = useTools();
   const take = () => {
     if (!inHand) store.go({ type: 'curve', curve: curve.id });
@@ -55,17 +72,17 @@ function CurveRow({ chart, curve, style, inHand }: { chart: BenchChart; curve: B
   return (
     <tr className={inHand ? 'chosen' : undefined} onFocus={take} data-curve={curve.id}>
       <td>
-        <Button size="small" variant="quiet" aria-pressed={inHand} aria-label={`Take ${curveName(chart, curve)} in hand`} onPress={take}>
+        <Button size="small" variant="quiet" aria-pressed={inHand} aria-label={`Take ${name} in hand`} onPress={take}>
           <Swatch style={style} />
         </Button>
       </td>
       <td className="num">
         <QuantityField
-          label={`Value of curve ${style + 1}: ${familyHead(chart)}`}
+          label={`Value of curve ${style + 1}: ${head}`}
           hideLabel
           size={6}
           value={curve.value}
-          onChange={(value) => store.perform({ type: 'setCurveValue', chart: chart.id, curve: curve.id, value })}
+          onChange={(value) => store.perform({ type: 'setCurveValue', chart, curve: curve.id, value })}
           isDisabled={frozen}
         />
       </td>
@@ -79,8 +96,8 @@ function CurveRow({ chart, curve, style, inHand }: { chart: BenchChart; curve: B
             size="small"
             variant="quiet"
             icon
-            aria-label={`Remove ${curveName(chart, curve)}`}
-            onPress={() => store.perform({ type: 'removeCurve', chart: chart.id, curve: curve.id })}
+            aria-label={`Remove ${name}`}
+            onPress={() => store.perform({ type: 'removeCurve', chart, curve: curve.id })}
           >
             ×
           </Button>
@@ -88,7 +105,7 @@ function CurveRow({ chart, curve, style, inHand }: { chart: BenchChart; curve: B
       </td>
     </tr>
   );
-}
+});
 
 /** A curve that was just added by its button waits for its value. */
 function useFocusOnAdded(table: React.RefObject<HTMLTableElement | null>, chart: BenchChart, inHand: string | null): void {

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { memo, useState } from 'react';
 import { Button } from '@/components/ui/Button';
 import { NativeSelect } from '@/components/ui/NativeSelect';
 import { QuantityField } from '@/components/ui/QuantityField';
@@ -22,6 +22,7 @@ export const editNumbers = (): void => {
 
 /** What is picked out, as numbers that can be typed over and as buttons for every key. */
 export function PlaceEditor({ chart }: { chart: BenchChart }) {
+  const { frozen } = useTools();
   const { selection } = useSession();
   const px = placeOfSelection(chart, selection);
   if (!selection || !px) return null;
@@ -32,12 +33,13 @@ export function PlaceEditor({ chart }: { chart: BenchChart }) {
         <StepButtons />
       </header>
       <PlaceFields chart={chart} px={px} selection={selection} />
-      <PlaceActions chart={chart} selection={selection} />
+      {!frozen && <NudgeButtons />}
+      {!frozen && selection.kind === 'point' && <LeaveOut chart={chart} selection={selection} />}
     </section>
   );
 }
 
-function StepButtons() {
+const StepButtons = memo(function StepButtons() {
   const tools = useTools();
   return (
     <span className="ml-auto flex gap-1">
@@ -49,7 +51,7 @@ function StepButtons() {
       </Button>
     </span>
   );
-}
+});
 
 /** The place in pixels and, where there is a frame, in the units of the axes; typing into either moves it. */
 function PlaceFields({ chart, px, selection }: { chart: BenchChart; px: Px; selection: Selection }) {
@@ -106,36 +108,33 @@ const ARROWS = [
   ['↓', 'down', [0, 1]],
 ] as const;
 
-function PlaceActions({ chart, selection }: { chart: BenchChart; selection: Selection }) {
+/** The arrow keys as buttons; the same for whatever is picked out. */
+const NudgeButtons = memo(function NudgeButtons() {
   const tools = useTools();
   const [step, setStep] = useState<'0.1' | '1' | '10'>('1');
-  if (tools.frozen) return null;
   return (
-    <>
-      <div className="flex flex-wrap items-center gap-1">
-        {ARROWS.map(([arrow, name, [dx, dy]]) => (
-          <Button
-            key={name}
-            size="small"
-            icon
-            aria-label={`Move ${name} by ${step} px`}
-            onPress={() => nudgeSelected(tools, [dx * Number(step), dy * Number(step)])}
-          >
-            {arrow}
-          </Button>
-        ))}
-        <NativeSelect label="Step" hideLabel choices={STEPS} value={step} onChange={setStep} className="bench-step" />
-        <Button size="small" onPress={() => tools.store.go({ type: 'tool', tool: 'target' })}>
-          Move by a click
+    <div className="flex flex-wrap items-center gap-1">
+      {ARROWS.map(([arrow, name, [dx, dy]]) => (
+        <Button
+          key={name}
+          size="small"
+          icon
+          aria-label={`Move ${name} by ${step}\u00A0px`}
+          onPress={() => nudgeSelected(tools, [dx * Number(step), dy * Number(step)])}
+        >
+          {arrow}
         </Button>
-        <Button size="small" variant="quiet" onPress={() => removeSelected(tools)}>
-          Remove
-        </Button>
-      </div>
-      {selection.kind === 'point' && <LeaveOut chart={chart} selection={selection} />}
-    </>
+      ))}
+      <NativeSelect label="Step" hideLabel choices={STEPS} value={step} onChange={setStep} className="bench-step" />
+      <Button size="small" onPress={() => tools.store.go({ type: 'tool', tool: 'target' })}>
+        Move by a click
+      </Button>
+      <Button size="small" variant="quiet" onPress={() => removeSelected(tools)}>
+        Remove
+      </Button>
+    </div>
   );
-}
+});
 
 function LeaveOut({ chart, selection }: { chart: BenchChart; selection: Extract<Selection, { kind: 'point' }> }) {
   const { store } = useTools();

@@ -10,14 +10,13 @@ export const decimalsAt = (chart: BenchChart, px: Px): readonly [number, number]
   return [decimals(step[0]), decimals(step[1])];
 };
 
-/** What stands at the head of a column or before a value: "ΔT / K", "Qc / W", "x" while nothing is said. */
+/** What stands at the head of a column or before a value: "ΔT / K", "Qc/Qmax / %", "x" while nothing is said. */
 export const axisHead = (chart: BenchChart, axis: 'x' | 'y'): string => {
   const { quantity, unit, of } = chart[axis];
   if (!quantity) return axis;
   const symbol = unit ? unitSymbol(unit) : '';
-  return of
-    ? `${quantitySymbol(quantity)} / ${RATING_SYMBOLS[of]}${symbol && ` / ${symbol}`}`
-    : `${quantitySymbol(quantity)}${symbol && ` / ${symbol}`}`;
+  const shown = of ? `${quantitySymbol(quantity)}/${RATING_SYMBOLS[of]}` : quantitySymbol(quantity);
+  return symbol ? `${shown} / ${symbol}` : shown;
 };
 
 /** Symbols of the ratings an axis may be normalised by. */

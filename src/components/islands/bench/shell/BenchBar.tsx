@@ -1,4 +1,4 @@
-import { useRef } from 'react';
+import { memo, useRef } from 'react';
 import { Button } from '@/components/ui/Button';
 import { Menu } from '@/components/ui/Menu';
 import { redoLabel, undoLabel } from '@/lib/editor';
@@ -13,7 +13,7 @@ const FILE_ITEMS = [
 ] as const;
 
 /** Where one is, how it stands, and the way back. */
-export function BenchBar({ onMessage }: { onMessage: (message: string) => void }) {
+export const BenchBar = memo(function BenchBar({ onMessage }: { onMessage: (message: string) => void }) {
   const { frozen } = useTools();
   return (
     <div className="bench-bar">
@@ -25,7 +25,7 @@ export function BenchBar({ onMessage }: { onMessage: (message: string) => void }
       </div>
     </div>
   );
-}
+});
 
 function UndoButtons() {
   const { store } = useTools();

@@ -60,6 +60,7 @@ function magnify(
   pen.fillRect(0, 0, size, size);
   pen.setTransform(scale, 0, 0, scale, size / 2 - x * scale, size / 2 - y * scale);
   pen.imageSmoothingEnabled = false;
-  pen.drawImage(image, 0, 0);
+  const reach = size / 2 / scale + 1;
+  pen.drawImage(image, x - reach, y - reach, 2 * reach, 2 * reach, x - reach, y - reach, 2 * reach, 2 * reach);
   overlay(pen, 1 / times);
 }

@@ -1,28 +1,39 @@
+import { memo } from 'react';
 import { Button } from '@/components/ui/Button';
 import { ToggleButton } from '@/components/ui/ToggleButton';
 import { Toolbar } from '@/components/ui/Toolbar';
 import { ZOOM_STEP, type Tool } from '@/lib/editor';
-import { useSession, useTools } from '../state/tools';
+import { useBench, useTools } from '../state/tools';
 
-const PLACES = { frame: 'Place marks', curves: 'Place points' } as const;
+const PLACES = { frame: 'marks', curves: 'points' } as const;
+
+/** A word that goes where there is little room. */
+const Wide = ({ children }: { children: string }) => <span className="bench-wide">{children}</span>;
 
 /** The tools of the station in hand, and the zoom. */
-export function StageToolbar({ onHelp }: { onHelp: () => void }) {
+export const StageToolbar = memo(function StageToolbar({ onHelp }: { onHelp: () => void }) {
   const { store, stage, frozen } = useTools();
-  const { station, tool, selection } = useSession();
+  const station = useBench((state) => state.session.station);
+  const tool = useBench((state) => state.session.tool);
+  const picked = useBench((state) => state.session.selection !== null);
   const use = (to: Tool) => () => store.go({ type: 'tool', tool: to });
   return (
     <Toolbar label="Tools of the picture" className="bench-tools">
       {(station === 'frame' || station === 'curves') && !frozen && (
         <>
           <ToggleButton size="small" isSelected={tool === 'place'} onChange={use('place')} aria-keyshortcuts="P">
-            {PLACES[station]}
+            Place<Wide>{PLACES[station]}</Wide>
           </ToggleButton>
           <ToggleButton size="small" isSelected={tool === 'select'} onChange={use('select')} aria-keyshortcuts="V">
-            Pick and move
+            Pick<Wide>and move</Wide>
           </ToggleButton>
-          {selection && (
-            <ToggleButton size="small" isSelected={tool === 'target'} onChange={(on) => use(on ? 'target' : 'select')()}>
+          {picked && (
+            <ToggleButton
+              size="small"
+              isSelected={tool === 'target'}
+              className="bench-wide"
+              onChange={(on) => use(on ? 'target' : 'select')()}
+            >
               Move it here
             </ToggleButton>
           )}
@@ -44,4 +55,4 @@ export function StageToolbar({ onHelp }: { onHelp: () => void }) {
       </span>
     </Toolbar>
   );
-}
+});

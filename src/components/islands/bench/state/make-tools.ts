@@ -8,14 +8,14 @@ import { createBenchStore } from './store';
 import { pagesOf, type BenchTools } from './tools';
 import { unsavedStore, type UnsavedStore } from './unsaved';
 
-const seams = (readingId: number, unsaved: UnsavedStore): SaverSeams => ({
+const seams = (readingId: number, tab: string, unsaved: UnsavedStore): SaverSeams => ({
   put: async (document, version) => {
     const { data } = await ask<SaveAnswer>(`/api/readings/${readingId}`, { method: 'PUT', body: { document }, ifMatch: `"${version}"` });
     showState(STATE_CHIP, 'draft'); // what was returned is a draft from its first change on
     return data;
   },
-  keep: (document, version) => unsaved.keep({ readingId, version, document, at: new Date().toISOString() }),
-  forget: () => unsaved.forget(readingId),
+  keep: (document, version) => unsaved.keep({ readingId, tab, version, document, at: new Date().toISOString() }),
+  forget: () => unsaved.forget(readingId, tab),
   after: (milliseconds, task) => {
     const timer = setTimeout(task, milliseconds);
     return () => clearTimeout(timer);
@@ -28,12 +28,13 @@ const STATE_CHIP = 'reading-state';
 /** Everything the bench works with, wired together. */
 export function makeTools(reading: ReadingView, personId: string): BenchTools {
   const frozen = !reading.may.edit;
+  const tab = crypto.randomUUID();
   const unsaved = unsavedStore(personId);
   const store = createBenchStore(reading.document, frozen, reading.may.takeBack ? 'hand-in' : 'chart');
-  const saver = new Saver(reading, seams(reading.id, unsaved));
+  const saver = new Saver(reading, seams(reading.id, tab, unsaved));
   return {
     reading,
-    personId,
+    tab,
     frozen,
     unsaved,
     store,

@@ -17,7 +17,8 @@ export interface BenchPage {
 /** What every part of the bench works with; made once for a page load. */
 export interface BenchTools {
   readonly reading: ReadingView;
-  readonly personId: string;
+  /** Names this page load. */
+  readonly tab: string;
   readonly pages: readonly BenchPage[];
   readonly store: BenchStore;
   readonly saver: Saver;

@@ -4,6 +4,8 @@ import type { BenchDocument } from '@/lib/editor';
 /** Work that the server has not confirmed yet, as it is kept in the browser. */
 export interface UnsavedWork {
   readonly readingId: number;
+  /** The page load that kept it, so that another tab's save does not forget it. */
+  readonly tab: string;
   /** The version on the server that the work was begun on. */
   readonly version: number;
   readonly document: BenchDocument;
@@ -19,7 +21,8 @@ interface Schema extends DBSchema {
 export interface UnsavedStore {
   readonly keep: (work: UnsavedWork) => Promise<void>;
   readonly find: (readingId: number) => Promise<UnsavedWork | null>;
-  readonly forget: (readingId: number) => Promise<void>;
+  /** Forgets what this tab has kept, or with `whatever` what any has. */
+  readonly forget: (readingId: number, tab: string | 'whatever') => Promise<void>;
 }
 
 /** One database a person, deleted as a whole at sign-out. */
@@ -53,6 +56,13 @@ export function unsavedStore(personId: string): UnsavedStore {
   return {
     keep: async (work) => void (await quietly((database) => database.put('readings', work))),
     find: async (readingId) => (await quietly((database) => database.get('readings', readingId))) ?? null,
-    forget: async (readingId) => void (await quietly((database) => database.delete('readings', readingId))),
+    forget: async (readingId, tab) => {
+      await quietly(async (database) => {
+        const change = database.transaction('readings', 'readwrite');
+        const kept = await change.store.get(readingId);
+        if (kept && (tab === 'whatever' || kept.tab === tab)) await change.store.delete(readingId);
+        await change.done;
+      });
+    },
   };
 }

@@ -35,7 +35,7 @@ export function CurvesStation({ chart }: { chart: BenchChart }) {
         curve.points.length === 0 && <p className="muted">Click along its line in the picture: eight points or so on a gentle curve.</p>
       )}
       <PlaceEditor chart={chart} />
-      {curve && <PointTable chart={chart} curve={curve} />}
+      {curve && <PointTable key={curve.id} chart={chart} curve={curve} />}
       <Missing sentences={chartState(chart).curves} ready="All curves of this chart are ready for the model." />
     </div>
   );
