@@ -6,7 +6,7 @@ import { parseReadingDocument, readWithFit } from '@/lib/reading';
 import { uniforms } from '../support/random';
 
 const MODULES = 2000;
-const RUNS = 200;
+const RUNS = 20;
 
 /** Models of the demo's modules, read from their documents; the search is timed on scaled copies of them. */
 async function models(): Promise<Candidate[]> {
@@ -24,7 +24,7 @@ async function candidateOf(file: string): Promise<Candidate | null> {
   const { alpha, R, K } = constantsOf(fit);
   const { covariance, misfit } = fit;
   const model = {
-    form: 'constant' as const,
+    form: fit.form,
     parameters: [alpha, R, K] as const,
     covariance,
     misfit,
