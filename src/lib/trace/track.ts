@@ -1,0 +1,131 @@
+import { localFit } from './polynomial';
+import { sectionAt, type Section } from './section';
+import type { InkReader } from './ink';
+import type { Mode, Raster, Step } from './types';
+
+/** A step with what was seen there. */
+export interface Seen extends Step {
+  readonly mass: number;
+  readonly soft: number;
+  readonly slope: number;
+}
+
+/** What is known of a line while it is followed. */
+export interface Line {
+  readonly picture: Raster;
+  readonly reader: InkReader;
+  /** Perpendicular, px. */
+  readonly thickness: number;
+}
+
+/** Which way a stretch runs: mode, and the sign of its steps. */
+export interface Heading {
+  readonly mode: Mode;
+  readonly sign: 1 | -1;
+}
+
+interface Expected {
+  readonly v: number;
+  readonly slope: number;
+}
+
+/** Most columns or rows without a clean section that are bridged. */
+const LONGEST_HIDDEN = 140;
+
+const flipped = (mode: Mode): Mode => (mode === 'columns' ? 'rows' : 'columns');
+const inMode = ({ mode, t, v }: Step, wanted: Mode): readonly [number, number] => (mode === wanted ? [t, v] : [v, t]);
+
+/** Where the line should be at t, from its last clean steps. */
+function expect(steps: readonly Seen[], mode: Mode, t: number, hidden: number): Expected | null {
+  const most = hidden > 3 ? 48 : 14;
+  const [ts, vs, ws]: [number[], number[], number[]] = [[], [], []];
+  for (let k = steps.length - 1; k >= 0 && ts.length < most && steps.length - k < 400; k--) {
+    const step = steps[k]!;
+    if (step.seen !== 'clean') continue;
+    const [at, v] = inMode(step, mode);
+    ts.push(at);
+    vs.push(v);
+    ws.push(1 / (1 + (ts.length / most) * 1.5));
+  }
+  if (ts.length < 2) return null;
+  const fit = localFit(ts, vs, ws, t, ts.length >= (hidden > 3 ? 24 : 10) ? 2 : 1);
+  return fit && { v: fit.value, slope: fit.slope };
+}
+
+/** Whether a section shows the whole line and nothing else. */
+function isClean({ mass, trust, edge }: Section, expectedMass: number): boolean {
+  return trust > 0.5 && edge < 0.2 && mass > 0.5 * expectedMass - 0.1 && mass < 1.3 * expectedMass + 0.45;
+}
+
+function isInside({ width, height }: Raster, mode: Mode, t: number, v: number): boolean {
+  const [x, y] = mode === 'columns' ? [t, v] : [v, t];
+  return x >= 0 && y >= 0 && x <= width && y <= height;
+}
+
+/** One step: the section where the line is expected, and how it counts. */
+function stepAt({ reader, thickness }: Line, mode: Mode, t: number, { v, slope }: Expected, tolerance: number): Seen {
+  const section = sectionAt(reader, mode, Math.floor(t), v, slope, thickness, tolerance);
+  if (!section) return { mode, t, v, slope, seen: 'none', mass: 0, soft: 0 };
+  const full = thickness * Math.hypot(1, slope);
+  const isNear = Math.abs(section.v - v) <= tolerance;
+  if (isNear && isClean(section, full)) return { mode, t, v: section.v, slope, seen: 'clean', mass: section.mass, soft: section.soft };
+  return { mode, t, v, slope, seen: section.mass < 0.3 * full && section.trust > 0.5 ? 'none' : 'part', mass: section.mass, soft: section.soft };
+}
+
+/** Whether what comes after a gap is the line: it goes on in the old direction for a while. */
+function goesOn(line: Line, steps: readonly Seen[], { mode, sign }: Heading, t: number, hidden: number): boolean {
+  const wanted = hidden > Math.max(8, 5 * line.thickness) ? 14 : 4;
+  const before = expect(steps, mode, t, hidden);
+  if (!before) return false;
+  const tried = [...steps.slice(-120)];
+  const seen: Seen[] = [];
+  for (let k = 0; k < wanted; k++) {
+    const at = t + k * sign;
+    const expected = seen.length >= 4 ? (expect(seen, mode, at, 0) ?? before) : { v: before.v + k * sign * before.slope, slope: before.slope };
+    if (!isInside(line.picture, mode, at, expected.v)) break;
+    const step = stepAt(line, mode, at, expected, toleranceAfter(hidden));
+    if (step.seen === 'clean') seen.push(step);
+    tried.push(step);
+  }
+  if (seen.length < Math.max(2, 0.55 * wanted)) return false;
+  const fit = localFit(seen.map((s) => s.t), seen.map((s) => s.v), null, t, 1);
+  if (!fit || seen.length < 5) return true;
+  return Math.abs(Math.atan(fit.slope) - Math.atan(before.slope)) < 0.15 + 0.002 * hidden;
+}
+
+const toleranceAfter = (hidden: number) => Math.min(4, 1.3 + 0.05 * hidden);
+
+/** The way on from the last steps: columns for shallow lines, rows for steep ones, with some reluctance to change. */
+function turned({ mode, sign }: Heading, slope: number): Heading {
+  if (Math.abs(slope) <= 1.25) return { mode, sign };
+  return { mode: flipped(mode), sign: sign * slope > 0 ? 1 : -1 };
+}
+
+/** Follows a line from known steps in one direction to its end; the steps come in order, the last one clean. */
+export function track(line: Line, known: readonly Seen[], heading: Heading): Seen[] {
+  const steps = [...known];
+  const longestGap = Math.min(90, Math.max(28, 0.06 * Math.max(line.picture.width, line.picture.height)));
+  let way = heading;
+  let [hidden, empty] = [0, 0];
+  let t = inMode(known[known.length - 1]!, way.mode)[0];
+  for (let guard = 0; guard < 4 * (line.picture.width + line.picture.height); guard++) {
+    const here = expect(steps, way.mode, t, hidden);
+    if (!here) break;
+    const next = turned(way, here.slope);
+    if (next.mode !== way.mode) {
+      t = Math.floor(here.v) + 0.5;
+      way = next;
+    }
+    t += way.sign;
+    const expected = expect(steps, way.mode, t, hidden);
+    if (!expected || !isInside(line.picture, way.mode, t, expected.v)) break;
+    let step = stepAt(line, way.mode, t, expected, toleranceAfter(hidden));
+    if (step.seen === 'clean' && hidden > 2 && !goesOn(line, steps, way, t, hidden)) step = { ...step, v: expected.v, seen: 'part' };
+    steps.push(step);
+    hidden = step.seen === 'clean' ? 0 : hidden + 1;
+    empty = step.seen === 'none' ? empty + 1 : step.seen === 'clean' ? 0 : empty;
+    if (empty > longestGap || hidden > LONGEST_HIDDEN) break;
+  }
+  while (steps.length > known.length && steps[steps.length - 1]!.seen !== 'clean') steps.pop();
+  return steps.slice(known.length);
+}
