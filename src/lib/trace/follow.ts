@@ -35,7 +35,7 @@ export function stepsFrom(picture: Raster, start: Px): Seen[] | null {
   const { paper, palette } = known(picture);
   const seed = seedAt(picture, paper, start);
   if (!seed) return null;
-  const reader = inkReader(picture, paper, palette, seed.ink);
+  const reader = inkReader(picture, paper, palette, seed.ink, seed.strayness);
   const begun = begin(picture, reader, seed);
   if (!begun) return null;
   const { line, steps, heading } = begun;

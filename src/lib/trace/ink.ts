@@ -27,12 +27,13 @@ const RUN = 6;
 /**
  * A reader of one ink over its local ground. A pixel p on ground g holds p = a·ink + (1 − a)·g, so that a = (g − p)·(g − ink)/|g − ink|²: exact for
  * area antialiasing in sRGB bytes. The ground is the paper, or a grid line where the same colour goes on at both sides of the line.
- * What that leaves unexplained is divided between this ink and the one other ink of the palette that explains it best.
+ * `strayness` is how far the ink's own pixels stray from its colour (bytes). What that leaves unexplained is divided between this ink and the one other ink of the palette that explains it best.
  */
-export function inkReader({ width, height, rgb }: Raster, paper: Paper, palette: readonly InkVector[], ink: InkVector): InkReader {
+export function inkReader({ width, height, rgb }: Raster, paper: Paper, palette: readonly InkVector[], ink: InkVector, strayness: number): InkReader {
   const size = Math.hypot(...ink);
   const [i0, i1, i2] = ink;
   const others = [...palette, [255, 255, 255] as InkVector].filter((other) => areDistinct(other, ink));
+  const strange = Math.max(18, 0.1 * size, Math.min(0.45 * size, 1.8 * strayness));
   const ground = new Float64Array(3);
   const d = new Float64Array(3);
   const left = new Float64Array(3);
@@ -81,7 +82,7 @@ export function inkReader({ width, height, rgb }: Raster, paper: Paper, palette:
     let cover = du / uu;
     let trust = 1;
     const rest = Math.hypot(d0 - cover * u0, d1 - cover * u1, d2 - cover * u2);
-    if (rest > 0.1 * size && rest > 18) {
+    if (rest > strange) {
       let best = rest;
       for (const [v0, v1, v2] of others) {
         const [vv, uv, dv] = [v0 * v0 + v1 * v1 + v2 * v2, u0 * v0 + u1 * v1 + u2 * v2, d0 * v0 + d1 * v1 + d2 * v2];
@@ -97,7 +98,7 @@ export function inkReader({ width, height, rgb }: Raster, paper: Paper, palette:
         if (left < best) {
           best = left;
           cover = a;
-          trust = b < 0.08 ? 1 : a + b > 0.9 ? 0.05 : 0.6;
+          trust = b < 0.08 ? 1 : a + b > 0.9 ? 0.3 : 0.7;
         }
       }
     }

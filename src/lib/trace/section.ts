@@ -45,6 +45,19 @@ function edgeFrom(cover: Float64Array, length: number, peak: number, step: 1 | -
   return at;
 }
 
+/** Nothing of the line can be seen, for the ground is as dark as its ink or another ink lies over it. */
+const VEILED: Section = { v: NaN, mass: 0, trust: 0, edge: 1, soft: 0, peak: 0 };
+
+function isVeiled(trust: Float64Array, first: number, length: number, expected: number, half: number): boolean {
+  let [sum, count] = [0, 0];
+  for (let k = 0; k < length; k++) {
+    if (Math.abs(first + k + 0.5 - expected) > Math.max(0.6, half)) continue;
+    sum += trust[k]!;
+    count++;
+  }
+  return sum < 0.5 * count;
+}
+
 /** Measures the line in one column or row; null where there is no ink within the tolerance. */
 export function sectionAt(
   reader: InkReader,
@@ -60,7 +73,7 @@ export function sectionAt(
   const start = Math.floor(expected) - reach;
   const { cover, trust, first, length } = reader.read(mode, line, start, 2 * reach + 1, half, slope);
   const peak = peakNear(cover, first, length, expected, tolerance);
-  if (peak < 0) return null;
+  if (peak < 0) return isVeiled(trust, first, length, expected, half) ? VEILED : null;
   const [from, to] = [edgeFrom(cover, length, peak, -1), edgeFrom(cover, length, peak, 1)];
   let [mass, moment, least, soft] = [0, 0, 1, 0];
   for (let k = Math.max(0, from - 1); k <= Math.min(length - 1, to + 1); k++) {

@@ -8,6 +8,8 @@ export interface Seed {
   readonly at: Px;
   readonly along: Px;
   readonly ink: InkVector;
+  /** How far its pixels stray from that colour, bytes. */
+  readonly strayness: number;
 }
 
 const REACH = 6;
@@ -52,7 +54,8 @@ function lineScore(contrast: Contrast, [x, y]: Px, [dx, dy]: Px): number {
 }
 
 /** The colour of full strokes along a line: of the strongest pixels across each step, a high one but not the highest. */
-function inkAlong(picture: Raster, paper: Paper, contrast: Contrast, [x, y]: Px, [dx, dy]: Px): InkVector {
+function inkAlong(picture: Raster, paper: Paper, contrast: Contrast, at: Px, along: Px): Pick<Seed, 'ink' | 'strayness'> {
+  const [[x, y], [dx, dy]] = [at, along];
   const strongest: { value: number; column: number; row: number }[] = [];
   for (let k = -10; k <= 10; k++) {
     let best = { value: 0, column: 0, row: 0 };
@@ -71,7 +74,29 @@ function inkAlong(picture: Raster, paper: Paper, contrast: Contrast, [x, y]: Px,
     paper.at(column, row, ground);
     for (let c = 0; c < 3; c++) sum[c] = sum[c]! + (ground[c]! - picture.rgb[(row * picture.width + column) * 3 + c]!) / upper.length;
   }
-  return sum;
+  return { ink: sum, strayness: straynessAlong(picture, paper, at, along, sum) };
+}
+
+/** How far the pixels on and beside a line stray from tints of its ink, bytes: four fifths stray less. Large where a JPEG smears colours. */
+function straynessAlong({ width, height, rgb }: Raster, paper: Paper, [x, y]: Px, [dx, dy]: Px, ink: InkVector): number {
+  const size = Math.hypot(...ink) || 1;
+  const ground = new Float64Array(3);
+  const strays: number[] = [];
+  for (let k = -10; k <= 10; k++) {
+    for (let across = -3; across <= 3; across++) {
+      const [column, row] = [Math.floor(x + k * dx - across * dy), Math.floor(y + k * dy + across * dx)];
+      if (column < 0 || row < 0 || column >= width || row >= height) continue;
+      paper.at(column, row, ground);
+      const at = (row * width + column) * 3;
+      const [r, g, b] = [ground[0]! - rgb[at]!, ground[1]! - rgb[at + 1]!, ground[2]! - rgb[at + 2]!];
+      const strength = Math.hypot(r, g, b);
+      if (strength < 16) continue;
+      const tint = (r * ink[0] + g * ink[1] + b * ink[2]) / size;
+      strays.push(Math.sqrt(Math.max(0, strength * strength - tint * tint)));
+    }
+  }
+  strays.sort((one, other) => one - other);
+  return strays[Math.floor(strays.length * 0.8)] ?? 0;
 }
 
 /** The line nearest a start within 6 px: its place, direction and ink; null on blank paper. */
@@ -87,5 +112,5 @@ export function seedAt(picture: Raster, paper: Paper, start: Px): Seed | null {
     }
   }
   if (!best) return null;
-  return { at: best.at, along: best.along, ink: inkAlong(picture, paper, contrast, best.at, best.along) };
+  return { at: best.at, along: best.along, ...inkAlong(picture, paper, contrast, best.at, best.along) };
 }

@@ -1,5 +1,6 @@
 import { localFit } from './polynomial';
 import { sectionAt, type Section } from './section';
+import { placeBy, templateFrom, type Template } from './template';
 import type { InkReader } from './ink';
 import type { Mode, Raster, Step } from './types';
 
@@ -72,6 +73,77 @@ function stepAt({ reader, thickness }: Line, mode: Mode, t: number, { v, slope }
   return { mode, t, v, slope, seen: section.mass < 0.3 * full && section.trust > 0.5 ? 'none' : 'part', mass: section.mass, soft: section.soft };
 }
 
+/** The newest template of a line while it is followed. */
+interface Kept {
+  template: Template | null;
+  mode: Mode;
+  until: number;
+}
+
+/** A template fit for this mode and slope, from the last wholly seen steps. */
+function templateOf({ reader, thickness }: Line, kept: Kept, steps: readonly Seen[], mode: Mode, slope: number): Template | null {
+  const isFit = kept.template && kept.mode === mode && Math.abs(kept.template.slope - slope) < 0.2;
+  if (isFit && steps.length < kept.until) return kept.template;
+  const full = thickness * Math.hypot(1, slope);
+  const wholes: Seen[] = [];
+  for (let k = steps.length - 1; k >= 0 && wholes.length < 40 && steps.length - k < 300; k--) {
+    const step = steps[k]!;
+    const isWhole = step.seen === 'clean' && step.mode === mode && Math.abs(step.mass - full) < 0.15 * full + 0.2;
+    if (isWhole && Math.abs(step.slope - slope) < 0.25) wholes.push(step);
+  }
+  const made = templateFrom(reader, wholes, thickness);
+  if (made || !isFit) kept.template = made;
+  kept.mode = mode;
+  kept.until = steps.length + 60;
+  return kept.template;
+}
+
+/** A step that is partly hidden, placed by the template where it can be. */
+function mended(line: Line, kept: Kept, steps: readonly Seen[], step: Seen, expected: Expected): Seen {
+  if (step.seen !== 'part') return step;
+  const template = templateOf(line, kept, steps, step.mode, expected.slope);
+  if (!template) return step;
+  const v = placeBy(line.reader, template, { mode: step.mode, t: step.t, ...expected }, line.thickness, 0.9);
+  return v === null ? step : { ...step, v, seen: 'clean', mass: 0 };
+}
+
+/** Where the line should be from its very last steps: after a sudden bend the longer past misleads. */
+function nearly(steps: readonly Seen[], mode: Mode, t: number): Expected | null {
+  const last = steps.slice(-4).filter(({ seen }) => seen === 'clean');
+  if (last.length < 4) return null;
+  const places = last.map((step) => inMode(step, mode));
+  const fit = localFit(places.map(([at]) => at), places.map(([, v]) => v), null, t, 1);
+  return fit && { v: fit.value, slope: fit.slope };
+}
+
+/** The step after a sudden bend, where it joins the last one. */
+function bent(line: Line, steps: readonly Seen[], { mode }: Heading, step: Seen): Seen {
+  const near = nearly(steps, mode, step.t);
+  if (!near) return step;
+  const other = stepAt(line, mode, step.t, near, 1.3 + Math.abs(near.slope) / 2);
+  return other.seen === 'clean' ? other : step;
+}
+
+/** The way on around a corner: across the old way, where the line is seen wholly for three steps from its last place. */
+function cornered(line: Line, steps: readonly Seen[], { mode, sign }: Heading, before: number): { step: Seen; way: Heading } | null {
+  const last = steps[steps.length - 1]!;
+  const near = nearly(steps, mode, last.t);
+  if (!near || Math.abs(near.slope) < 0.3 || Math.abs(near.slope - before) + Math.abs(near.slope) < 0.6) return null;
+  const [at, v] = inMode(last, mode);
+  const way: Heading = { mode: flipped(mode), sign: sign * near.slope > 0 ? 1 : -1 };
+  const seen: Seen[] = [];
+  let [from, slope, t] = [at, 0.5 * Math.sign(near.slope), Math.floor(v) + 0.5];
+  for (let k = 0; k < 3; k++) {
+    t += way.sign;
+    const step = stepAt(line, way.mode, t, { v: from + slope * way.sign * (k === 0 ? Math.abs(t - v) : 1), slope }, 1.6);
+    if (step.seen !== 'clean') return null;
+    if (k > 0) slope = (step.v - from) * way.sign;
+    from = step.v;
+    seen.push(step);
+  }
+  return { step: seen[0]!, way };
+}
+
 /** Whether what comes after a gap is the line: it goes on in the old direction for a while. */
 function goesOn(line: Line, steps: readonly Seen[], { mode, sign }: Heading, t: number, hidden: number): boolean {
   const wanted = hidden > Math.max(8, 5 * line.thickness) ? 14 : 4;
@@ -106,12 +178,13 @@ export function track(line: Line, known: readonly Seen[], heading: Heading): See
   const steps = [...known];
   const longestGap = Math.min(90, Math.max(28, 0.06 * Math.max(line.picture.width, line.picture.height)));
   let way = heading;
+  const kept: Kept = { template: null, mode: heading.mode, until: 0 };
   let [hidden, empty] = [0, 0];
   let t = inMode(known[known.length - 1]!, way.mode)[0];
   for (let guard = 0; guard < 4 * (line.picture.width + line.picture.height); guard++) {
     const here = expect(steps, way.mode, t, hidden);
     if (!here) break;
-    const next = turned(way, here.slope);
+    const next = hidden === 0 ? turned(way, here.slope) : way;
     if (next.mode !== way.mode) {
       t = Math.floor(here.v) + 0.5;
       way = next;
@@ -121,9 +194,13 @@ export function track(line: Line, known: readonly Seen[], heading: Heading): See
     if (!expected || !isInside(line.picture, way.mode, t, expected.v)) break;
     let step = stepAt(line, way.mode, t, expected, toleranceAfter(hidden));
     if (step.seen === 'clean' && hidden > 2 && !goesOn(line, steps, way, t, hidden)) step = { ...step, v: expected.v, seen: 'part' };
+    if (hidden === 0 && step.seen !== 'clean') step = bent(line, steps, way, step);
+    const corner = hidden === 0 && step.seen !== 'clean' ? cornered(line, steps, way, here.slope) : null;
+    if (corner) [step, way, t] = [corner.step, corner.way, corner.step.t];
+    if (hidden <= 60 && empty === 0) step = mended(line, kept, steps, step, expected);
     steps.push(step);
     hidden = step.seen === 'clean' ? 0 : hidden + 1;
-    empty = step.seen === 'none' ? empty + 1 : step.seen === 'clean' ? 0 : empty;
+    empty = step.seen === 'clean' ? 0 : empty + (step.seen === 'none' || empty > 0 ? 1 : 0);
     if (empty > longestGap || hidden > LONGEST_HIDDEN) break;
   }
   while (steps.length > known.length && steps[steps.length - 1]!.seen !== 'clean') steps.pop();
