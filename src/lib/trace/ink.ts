@@ -98,7 +98,7 @@ export function inkReader({ width, height, rgb }: Raster, paper: Paper, palette:
         if (left < best) {
           best = left;
           cover = a;
-          trust = b < 0.08 ? 1 : a + b > 0.9 ? 0.3 : 0.7;
+          trust = b < 0.08 ? 1 : a + b > 0.9 ? (b > a ? 0.15 : 0.5) : 0.8;
         }
       }
     }

@@ -55,7 +55,7 @@ function isVeiled(trust: Float64Array, first: number, length: number, expected: 
     sum += trust[k]!;
     count++;
   }
-  return sum < 0.5 * count;
+  return sum < 0.8 * count;
 }
 
 /** Measures the line in one column or row; null where there is no ink within the tolerance. */

@@ -124,5 +124,5 @@ function holds(template: Template, cover: Float64Array, trust: Float64Array, sta
       ink += trust[k]! * Math.max(0, there);
     } else if (rest < 0) wrong += trust[k]! * -rest;
   }
-  return known > 0.3 * all && ink > 0.15 && wrong < 0.5;
+  return known > 0.15 * all && ink > 0.15 && wrong < 0.5;
 }

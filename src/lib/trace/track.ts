@@ -145,19 +145,18 @@ function cornered(line: Line, steps: readonly Seen[], { mode, sign }: Heading, b
 }
 
 /** Whether what comes after a gap is the line: it goes on in the old direction for a while. */
-function goesOn(line: Line, steps: readonly Seen[], { mode, sign }: Heading, t: number, hidden: number): boolean {
+function goesOn(line: Line, kept: Kept, steps: readonly Seen[], { mode, sign }: Heading, t: number, hidden: number): boolean {
   const wanted = hidden > Math.max(8, 5 * line.thickness) ? 14 : 4;
   const before = expect(steps, mode, t, hidden);
   if (!before) return false;
-  const tried = [...steps.slice(-120)];
   const seen: Seen[] = [];
   for (let k = 0; k < wanted; k++) {
     const at = t + k * sign;
     const expected = seen.length >= 4 ? (expect(seen, mode, at, 0) ?? before) : { v: before.v + k * sign * before.slope, slope: before.slope };
     if (!isInside(line.picture, mode, at, expected.v)) break;
-    const step = stepAt(line, mode, at, expected, toleranceAfter(hidden));
+    const step = mended(line, kept, steps, stepAt(line, mode, at, expected, toleranceAfter(hidden)), expected);
     if (step.seen === 'clean') seen.push(step);
-    tried.push(step);
+    else if (wanted > 4 && k < 4 && k >= seen.length + 1) return false;
   }
   if (seen.length < Math.max(2, 0.55 * wanted)) return false;
   const fit = localFit(seen.map((s) => s.t), seen.map((s) => s.v), null, t, 1);
@@ -193,16 +192,38 @@ export function track(line: Line, known: readonly Seen[], heading: Heading): See
     const expected = expect(steps, way.mode, t, hidden);
     if (!expected || !isInside(line.picture, way.mode, t, expected.v)) break;
     let step = stepAt(line, way.mode, t, expected, toleranceAfter(hidden));
-    if (step.seen === 'clean' && hidden > 2 && !goesOn(line, steps, way, t, hidden)) step = { ...step, v: expected.v, seen: 'part' };
+    const isAfterGap = hidden > 2 && empty > 0;
+    if (isAfterGap) step = mended(line, kept, steps, step, expected);
+    if (step.seen === 'clean' && hidden > 2 && !goesOn(line, kept, steps, way, t, hidden)) step = { ...step, v: expected.v, seen: 'part' };
     if (hidden === 0 && step.seen !== 'clean') step = bent(line, steps, way, step);
     const corner = hidden === 0 && step.seen !== 'clean' ? cornered(line, steps, way, here.slope) : null;
     if (corner) [step, way, t] = [corner.step, corner.way, corner.step.t];
-    if (hidden <= 60 && empty === 0) step = mended(line, kept, steps, step, expected);
+    if (hidden <= 60 && !isAfterGap && empty <= 1) step = mended(line, kept, steps, step, expected);
     steps.push(step);
     hidden = step.seen === 'clean' ? 0 : hidden + 1;
     empty = step.seen === 'clean' ? 0 : empty + (step.seen === 'none' || empty > 0 ? 1 : 0);
     if (empty > longestGap || hidden > LONGEST_HIDDEN) break;
   }
-  while (steps.length > known.length && steps[steps.length - 1]!.seen !== 'clean') steps.pop();
-  return steps.slice(known.length);
+  return ended(line, steps, known.length).slice(known.length);
+}
+
+const dropHidden = (steps: Seen[], least: number): void => {
+  while (steps.length > least && steps[steps.length - 1]!.seen !== 'clean') steps.pop();
+};
+
+/** Without what does not belong to the end of the line: hidden steps, the slanted cap of the stroke, ink of an axis that the line ends on. */
+function ended(line: Line, steps: Seen[], least: number): Seen[] {
+  dropHidden(steps, least);
+  for (let k = 0; k < 5 && steps.length > Math.max(least, 30); k++) {
+    const last = steps[steps.length - 1]!;
+    const earlier = steps.slice(0, -1 - Math.min(3, k));
+    const before = expect(earlier, last.mode, last.t, 4);
+    const full = line.thickness * Math.hypot(1, last.slope);
+    const isCap = last.mass > 0 && last.mass < 0.8 * full;
+    const isOff = before !== null && Math.abs(before.v - last.v) > 0.3 + 0.1 * line.thickness;
+    if (!isCap && !isOff) break;
+    steps.pop();
+    dropHidden(steps, least);
+  }
+  return steps;
 }
