@@ -3,7 +3,7 @@ import { sectionAt } from './section';
 import type { InkReader } from './ink';
 import type { Seed } from './seed';
 import type { Heading, Line, Seen } from './track';
-import type { Raster } from './types';
+import type { Bounds, Raster } from './types';
 
 const median = (values: readonly number[]): number => {
   const sorted = [...values].sort((a, b) => a - b);
@@ -11,7 +11,7 @@ const median = (values: readonly number[]): number => {
 };
 
 /** The first steps of a line, around its seed, with its thickness; null where there is no line. */
-export function begin(picture: Raster, reader: InkReader, { at, along }: Seed): { line: Line; steps: Seen[]; heading: Heading } | null {
+export function begin(picture: Raster, reader: InkReader, { at, along }: Seed, bounds: Bounds): { line: Line; steps: Seen[]; heading: Heading } | null {
   const mode = Math.abs(along[0]) >= Math.abs(along[1]) ? 'columns' : 'rows';
   const [t0, v0] = mode === 'columns' ? at : [at[1], at[0]];
   const slope = mode === 'columns' ? along[1] / along[0] : along[0] / along[1];
@@ -26,7 +26,7 @@ export function begin(picture: Raster, reader: InkReader, { at, along }: Seed): 
     if (steps.length < (span === 9 ? 8 : 5)) continue;
     const thickness = median(steps.map(({ mass }) => mass)) / Math.hypot(1, slope);
     const full = steps.filter(({ mass }) => mass > 0.6 * thickness * Math.hypot(1, slope) && mass < 1.4 * thickness * Math.hypot(1, slope) + 0.4);
-    return { line: { picture, reader, thickness }, steps: full, heading: { mode, sign: 1 } };
+    return { line: { picture, reader, thickness, bounds }, steps: full, heading: { mode, sign: 1 } };
   }
   return null;
 }

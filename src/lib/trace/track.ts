@@ -2,13 +2,17 @@ import { localFit } from './polynomial';
 import { sectionAt, type Section } from './section';
 import { placeBy, templateFrom, type Template } from './template';
 import type { InkReader } from './ink';
-import type { Mode, Raster, Step } from './types';
+import type { Bounds, Mode, Step } from './types';
 
 /** A step with what was seen there. */
 export interface Seen extends Step {
   readonly mass: number;
   readonly soft: number;
   readonly slope: number;
+  /** Placed by the template, for only part of it was seen. */
+  readonly mended?: boolean;
+  /** Where a step is not clean: the centroid of what is there instead, px from the line's place. */
+  readonly beside?: number;
 }
 
 /** What is known of a line while it is followed. */
@@ -17,6 +21,8 @@ export interface Line {
   readonly reader: InkReader;
   /** Perpendicular, px. */
   readonly thickness: number;
+  /** Where the curve may run. */
+  readonly bounds: Bounds;
 }
 
 /** Which way a stretch runs: mode, and the sign of its steps. */
@@ -58,9 +64,9 @@ function isClean({ mass, trust, edge }: Section, expectedMass: number): boolean 
   return trust > 0.5 && edge < 0.2 && mass > 0.5 * expectedMass - 0.1 && mass < 1.3 * expectedMass + 0.45;
 }
 
-function isInside({ width, height }: Raster, mode: Mode, t: number, v: number): boolean {
+function isInside({ left, top, right, bottom }: Bounds, mode: Mode, t: number, v: number): boolean {
   const [x, y] = mode === 'columns' ? [t, v] : [v, t];
-  return x >= 0 && y >= 0 && x <= width && y <= height;
+  return x >= left && y >= top && x <= right && y <= bottom;
 }
 
 /** One step: the section where the line is expected, and how it counts. */
@@ -70,7 +76,8 @@ function stepAt({ reader, thickness }: Line, mode: Mode, t: number, { v, slope }
   const full = thickness * Math.hypot(1, slope);
   const isNear = Math.abs(section.v - v) <= tolerance;
   if (isNear && isClean(section, full)) return { mode, t, v: section.v, slope, seen: 'clean', mass: section.mass, soft: section.soft };
-  return { mode, t, v, slope, seen: section.mass < 0.3 * full && section.trust > 0.5 ? 'none' : 'part', mass: section.mass, soft: section.soft };
+  const seen = section.mass < 0.3 * full && section.trust > 0.5 ? 'none' : 'part';
+  return { mode, t, v, slope, seen, mass: section.mass, soft: section.soft, ...(section.mass > 0 && { beside: section.v - v }) };
 }
 
 /** The newest template of a line while it is followed. */
@@ -104,7 +111,7 @@ function mended(line: Line, kept: Kept, steps: readonly Seen[], step: Seen, expe
   const template = templateOf(line, kept, steps, step.mode, expected.slope);
   if (!template) return step;
   const v = placeBy(line.reader, template, { mode: step.mode, t: step.t, ...expected }, line.thickness, 0.9);
-  return v === null ? step : { ...step, v, seen: 'clean', mass: 0 };
+  return v === null ? step : { ...step, v, seen: 'clean', mass: 0, mended: true };
 }
 
 /** Where the line should be from its very last steps: after a sudden bend the longer past misleads. */
@@ -153,7 +160,7 @@ function goesOn(line: Line, kept: Kept, steps: readonly Seen[], { mode, sign }: 
   for (let k = 0; k < wanted; k++) {
     const at = t + k * sign;
     const expected = seen.length >= 4 ? (expect(seen, mode, at, 0) ?? before) : { v: before.v + k * sign * before.slope, slope: before.slope };
-    if (!isInside(line.picture, mode, at, expected.v)) break;
+    if (!isInside(line.bounds, mode, at, expected.v)) break;
     const step = mended(line, kept, steps, stepAt(line, mode, at, expected, toleranceAfter(hidden)), expected);
     if (step.seen === 'clean') seen.push(step);
     else if (wanted > 4 && k < 4 && k >= seen.length + 1) return false;
@@ -172,8 +179,8 @@ function turned({ mode, sign }: Heading, slope: number): Heading {
   return { mode: flipped(mode), sign: sign * slope > 0 ? 1 : -1 };
 }
 
-/** Follows a line from known steps in one direction to its end; the steps come in order, the last one clean. */
-export function track(line: Line, known: readonly Seen[], heading: Heading): Seen[] {
+/** Follows a line from known steps in one direction to its end; the steps come in order, the last one clean. `isUnder`: it ends where it runs under something. */
+export function track(line: Line, known: readonly Seen[], heading: Heading): { steps: Seen[]; isUnder: boolean } {
   const steps = [...known];
   const longestGap = Math.min(90, Math.max(28, 0.06 * Math.max(line.picture.width, line.picture.height)));
   let way = heading;
@@ -190,7 +197,7 @@ export function track(line: Line, known: readonly Seen[], heading: Heading): See
     }
     t += way.sign;
     const expected = expect(steps, way.mode, t, hidden);
-    if (!expected || !isInside(line.picture, way.mode, t, expected.v)) break;
+    if (!expected || !isInside(line.bounds, way.mode, t, expected.v)) break;
     let step = stepAt(line, way.mode, t, expected, toleranceAfter(hidden));
     const isAfterGap = hidden > 2 && empty > 0;
     if (isAfterGap) step = mended(line, kept, steps, step, expected);
@@ -204,7 +211,10 @@ export function track(line: Line, known: readonly Seen[], heading: Heading): See
     empty = step.seen === 'clean' ? 0 : empty + (step.seen === 'none' || empty > 0 ? 1 : 0);
     if (empty > longestGap || hidden > LONGEST_HIDDEN) break;
   }
-  return ended(line, steps, known.length).slice(known.length);
+  const seen = steps.findLastIndex((step) => step.seen === 'clean');
+  const after = steps.slice(seen + 1, seen + 7);
+  const isUnder = after.length > 0 && after.filter((step) => step.seen === 'part').length > after.length / 2;
+  return { steps: ended(line, steps, known.length).slice(known.length), isUnder };
 }
 
 const dropHidden = (steps: Seen[], least: number): void => {
