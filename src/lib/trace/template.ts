@@ -75,7 +75,7 @@ const TOO_MUCH = 0.25;
 
 /**
  * The place of a line in a section where something hides part of it: least squares of the template over the pixels that are understood, with truncated
- * residuals so that foreign ink does not pull. Null where what is seen does not hold the place.
+ * residuals so that foreign ink does not pull. Null where what is seen does not hold the place. `mayBeCut`: much of the stroke may be missing, as where it ends at an edge.
  */
 export function placeBy(
   reader: InkReader,
@@ -83,6 +83,7 @@ export function placeBy(
   { mode, t, v: expected, slope }: Whole,
   thickness: number,
   tolerance: number,
+  mayBeCut: boolean,
 ): number | null {
   const half = (thickness * Math.hypot(1, slope)) / 2;
   const reach = Math.ceil(template.reach + tolerance);
@@ -107,22 +108,23 @@ export function placeBy(
   const bend = before - 2 * cost(best) + after;
   if (!(bend > 0)) return null;
   const v = best + Math.max(-step, Math.min(step, ((before - after) / (2 * bend)) * step));
-  return holds(template, cover, trust, start, length, v) ? v : null;
+  return holds(template, cover, trust, start, length, v, mayBeCut) ? v : null;
 }
 
 /** Whether the pixels that agree with the template know enough of its place, and see its ink. */
-function holds(template: Template, cover: Float64Array, trust: Float64Array, start: number, length: number, v: number): boolean {
-  let [known, all, ink, wrong] = [0, 0, 0, 0];
+function holds(template: Template, cover: Float64Array, trust: Float64Array, start: number, length: number, v: number, mayBeCut: boolean): boolean {
+  let [known, all, ink, wrong, full] = [0, 0, 0, 0, 0];
   for (let k = 0; k < length; k++) {
     const offset = start + k + 0.5 - v;
     const steepness = (coverAt(template, offset + 0.25) - coverAt(template, offset - 0.25)) ** 2;
     all += steepness;
     const there = coverAt(template, offset);
     const rest = cover[k]! - there;
+    full += Math.max(0, there);
     if (Math.abs(rest) < 0.2) {
       known += trust[k]! * steepness;
       ink += trust[k]! * Math.max(0, there);
     } else if (rest < 0) wrong += trust[k]! * -rest;
   }
-  return known > 0.15 * all && ink > 0.15 && wrong < 0.5;
+  return known > 0.15 * all && ink > 0.15 && wrong < (mayBeCut && known > 0.35 * all ? 0.65 * full : 0.5);
 }

@@ -106,11 +106,12 @@ function templateOf({ reader, thickness }: Line, kept: Kept, steps: readonly See
 }
 
 /** A step that is partly hidden, placed by the template where it can be. */
-function mended(line: Line, kept: Kept, steps: readonly Seen[], step: Seen, expected: Expected): Seen {
-  if (step.seen !== 'part') return step;
+function mended(line: Line, kept: Kept, steps: readonly Seen[], step: Seen, expected: Expected, mayBeCut: boolean): Seen {
+  const isShort = mayBeCut && step.seen === 'clean' && step.mass < 0.8 * line.thickness * Math.hypot(1, expected.slope);
+  if (step.seen !== 'part' && !isShort) return step;
   const template = templateOf(line, kept, steps, step.mode, expected.slope);
   if (!template) return step;
-  const v = placeBy(line.reader, template, { mode: step.mode, t: step.t, ...expected }, line.thickness, 0.9);
+  const v = placeBy(line.reader, template, { mode: step.mode, t: step.t, ...expected }, line.thickness, 0.9, mayBeCut);
   return v === null ? step : { ...step, v, seen: 'clean', mass: 0, mended: true };
 }
 
@@ -161,7 +162,7 @@ function goesOn(line: Line, kept: Kept, steps: readonly Seen[], { mode, sign }: 
     const at = t + k * sign;
     const expected = seen.length >= 4 ? (expect(seen, mode, at, 0) ?? before) : { v: before.v + k * sign * before.slope, slope: before.slope };
     if (!isInside(line.bounds, mode, at, expected.v)) break;
-    const step = mended(line, kept, steps, stepAt(line, mode, at, expected, toleranceAfter(hidden)), expected);
+    const step = mended(line, kept, steps, stepAt(line, mode, at, expected, toleranceAfter(hidden)), expected, false);
     if (step.seen === 'clean') seen.push(step);
     else if (wanted > 4 && k < 4 && k >= seen.length + 1) return false;
   }
@@ -200,12 +201,12 @@ export function track(line: Line, known: readonly Seen[], heading: Heading): { s
     if (!expected || !isInside(line.bounds, way.mode, t, expected.v)) break;
     let step = stepAt(line, way.mode, t, expected, toleranceAfter(hidden));
     const isAfterGap = hidden > 2 && empty > 0;
-    if (isAfterGap) step = mended(line, kept, steps, step, expected);
+    if (isAfterGap) step = mended(line, kept, steps, step, expected, false);
     if (step.seen === 'clean' && hidden > 2 && !goesOn(line, kept, steps, way, t, hidden)) step = { ...step, v: expected.v, seen: 'part' };
     if (hidden === 0 && step.seen !== 'clean') step = bent(line, steps, way, step);
     const corner = hidden === 0 && step.seen !== 'clean' ? cornered(line, steps, way, here.slope) : null;
     if (corner) [step, way, t] = [corner.step, corner.way, corner.step.t];
-    if (hidden <= 60 && !isAfterGap && empty <= 1) step = mended(line, kept, steps, step, expected);
+    if (hidden <= 60 && !isAfterGap && empty <= 1) step = mended(line, kept, steps, step, expected, hidden === 0);
     steps.push(step);
     hidden = step.seen === 'clean' ? 0 : hidden + 1;
     empty = step.seen === 'clean' ? 0 : empty + (step.seen === 'none' || empty > 0 ? 1 : 0);
