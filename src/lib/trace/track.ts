@@ -152,6 +152,19 @@ function cornered(line: Line, steps: readonly Seen[], { mode, sign }: Heading, b
   return { step: seen[0]!, way };
 }
 
+/** Places the last steps of a gap, where the stroke shows in part before it is whole again. */
+function uncover(line: Line, kept: Kept, steps: Seen[], next: Seen, sign: 1 | -1): void {
+  let after = next;
+  for (let at = steps.length - 1; at >= steps.length - 3; at--) {
+    const step = steps[at];
+    if (step?.seen !== 'part' || step.mode !== next.mode) return;
+    const placed = mended(line, kept, steps, step, { v: after.v - sign * next.slope, slope: next.slope }, true);
+    if (placed.seen !== 'clean') return;
+    steps[at] = placed;
+    after = placed;
+  }
+}
+
 /** Whether what comes after a gap is the line: it goes on in the old direction for a while. */
 function goesOn(line: Line, kept: Kept, steps: readonly Seen[], { mode, sign }: Heading, t: number, hidden: number): boolean {
   const wanted = hidden > Math.max(8, 5 * line.thickness) ? 14 : 4;
@@ -207,6 +220,7 @@ export function track(line: Line, known: readonly Seen[], heading: Heading): { s
     const corner = hidden === 0 && step.seen !== 'clean' ? cornered(line, steps, way, here.slope) : null;
     if (corner) [step, way, t] = [corner.step, corner.way, corner.step.t];
     if (hidden <= 60 && !isAfterGap && empty <= 1) step = mended(line, kept, steps, step, expected, hidden === 0);
+    if (step.seen === 'clean' && isAfterGap) uncover(line, kept, steps, step, way.sign);
     steps.push(step);
     hidden = step.seen === 'clean' ? 0 : hidden + 1;
     empty = step.seen === 'clean' ? 0 : empty + (step.seen === 'none' || empty > 0 ? 1 : 0);
