@@ -41,15 +41,27 @@ function covered(frame: Frame, curve: Truth['curves'][number], followed: Extract
     const isStep = Math.hypot(a[0] - b[0], a[1] - b[1]) <= 2.0001;
     const isGap =
       xb - xa < 0.03 * axis &&
-      (isDashed || followed.gaps.some(({ from, to }) => Math.hypot(from[0] - a[0], from[1] - a[1]) < 0.01 && Math.hypot(to[0] - b[0], to[1] - b[1]) < 0.01));
+      (isDashed ||
+        followed.gaps.some(
+          ({ from, to }) => Math.hypot(from[0] - a[0], from[1] - a[1]) < 0.01 && Math.hypot(to[0] - b[0], to[1] - b[1]) < 0.01,
+        ));
     if (isStep || isGap) sum += Math.max(0, Math.min(xb, last) - Math.max(xa, first));
   }
   return (100 * sum) / (last - first);
 }
 
 /** The axis range in x: from the leftmost to the rightmost mark. */
-export function scoreCurve(frame: Frame, xRange: number, yRange: number, curve: Truth['curves'][number], followed: Extract<Followed, { ok: true }>): Score {
-  const errors = followed.points.map((px) => errorAt(frame, curve, px)).filter((error) => error !== null).map((error) => (100 * error) / yRange);
+export function scoreCurve(
+  frame: Frame,
+  xRange: number,
+  yRange: number,
+  curve: Truth['curves'][number],
+  followed: Extract<Followed, { ok: true }>,
+): Score {
+  const errors = followed.points
+    .map((px) => errorAt(frame, curve, px))
+    .filter((error) => error !== null)
+    .map((error) => (100 * error) / yRange);
   const sizes = errors.map(Math.abs).sort((a, b) => a - b);
   const mean = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0) / values.length;
   return {

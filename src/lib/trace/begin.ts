@@ -11,7 +11,12 @@ const median = (values: readonly number[]): number => {
 };
 
 /** The first steps of a line, around its seed, with its thickness; null where there is no line. */
-export function begin(picture: Raster, reader: InkReader, { at, along }: Seed, bounds: Bounds): { line: Line; steps: Seen[]; heading: Heading } | null {
+export function begin(
+  picture: Raster,
+  reader: InkReader,
+  { at, along }: Seed,
+  bounds: Bounds,
+): { line: Line; steps: Seen[]; heading: Heading } | null {
   const mode = Math.abs(along[0]) >= Math.abs(along[1]) ? 'columns' : 'rows';
   const [t0, v0] = mode === 'columns' ? at : [at[1], at[0]];
   const slope = mode === 'columns' ? along[1] / along[0] : along[0] / along[1];
@@ -25,7 +30,9 @@ export function begin(picture: Raster, reader: InkReader, { at, along }: Seed, b
     const steps = straightest(found);
     if (steps.length < (span === 9 ? 8 : 5)) continue;
     const thickness = median(steps.map(({ mass }) => mass)) / Math.hypot(1, slope);
-    const full = steps.filter(({ mass }) => mass > 0.6 * thickness * Math.hypot(1, slope) && mass < 1.4 * thickness * Math.hypot(1, slope) + 0.4);
+    const full = steps.filter(
+      ({ mass }) => mass > 0.6 * thickness * Math.hypot(1, slope) && mass < 1.4 * thickness * Math.hypot(1, slope) + 0.4,
+    );
     return { line: { picture, reader, thickness, bounds }, steps: full, heading: { mode, sign: 1 } };
   }
   return null;
@@ -35,7 +42,13 @@ export function begin(picture: Raster, reader: InkReader, { at, along }: Seed, b
 function straightest(found: readonly Seen[]): Seen[] {
   let kept: readonly Seen[] = found;
   for (const most of [2, 1, 0.8]) {
-    const fit = localFit(kept.map(({ t }) => t), kept.map(({ v }) => v), null, 0, 1);
+    const fit = localFit(
+      kept.map(({ t }) => t),
+      kept.map(({ v }) => v),
+      null,
+      0,
+      1,
+    );
     if (!fit) return [];
     const next = kept.filter(({ t, v }) => Math.abs(v - fit.value - fit.slope * t) < most);
     if (next.length >= 3) kept = next;

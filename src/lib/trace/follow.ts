@@ -42,7 +42,11 @@ const pixelOf = ({ mode, t, v }: Seen): Px => (mode === 'columns' ? [t, v] : [v,
 function wholeDoubts(ink: InkVector, ends: readonly { readonly at: Seen; readonly isUnder: boolean }[]): Doubt[] {
   const under = ends
     .filter(({ isUnder }) => isUnder)
-    .map(({ at }) => ({ px: pixelOf(at), why: 'end' as const, text: 'The line runs under something else here and does not come out again: check that it ends here.' }));
+    .map(({ at }) => ({
+      px: pixelOf(at),
+      why: 'end' as const,
+      text: 'The line runs under something else here and does not come out again: check that it ends here.',
+    }));
   const isFaint = Math.hypot(...ink) < FAINT;
   const text = 'This line is hardly darker than the paper: check that its points lie on it.';
   return isFaint ? [...under, { px: pixelOf(ends[0]!.at), why: 'faint', text }] : under;
@@ -92,4 +96,3 @@ export function followLine(picture: Raster, start: Px, { through = [], bounds }:
   }
   return { ok: true, ...pieces };
 }
-

@@ -29,7 +29,13 @@ const RUN = 6;
  * area antialiasing in sRGB bytes. The ground is the paper, or a grid line where the same colour goes on at both sides of the line.
  * `strayness` is how far the ink's own pixels stray from its colour (bytes). What that leaves unexplained is divided between this ink and the one other ink of the palette that explains it best.
  */
-export function inkReader({ width, height, rgb }: Raster, paper: Paper, palette: readonly InkVector[], ink: InkVector, strayness: number): InkReader {
+export function inkReader(
+  { width, height, rgb }: Raster,
+  paper: Paper,
+  palette: readonly InkVector[],
+  ink: InkVector,
+  strayness: number,
+): InkReader {
   const size = Math.hypot(...ink);
   const [i0, i1, i2] = ink;
   const others = [...palette, [255, 255, 255] as InkVector].filter((other) => areDistinct(other, ink));

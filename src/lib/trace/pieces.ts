@@ -31,10 +31,18 @@ function doubtOf({ from, to, why }: Gap): Doubt | null {
   const length = distance(from, to);
   const px: Px = [(from[0] + to[0]) / 2, (from[1] + to[1]) / 2];
   if (why === 'label' && length > LONG_GAP) {
-    return { px, why: 'gap', text: `The line is hidden for ${whole(length)} pixels here and is taken to go on beyond: check that it is the same curve.` };
+    return {
+      px,
+      why: 'gap',
+      text: `The line is hidden for ${whole(length)} pixels here and is taken to go on beyond: check that it is the same curve.`,
+    };
   }
   if (why === 'crossing' && length > LONG_GAP / 2) {
-    return { px, why: 'crossing', text: `Another line covers this one for ${whole(length)} pixels: check that the curve goes straight on.` };
+    return {
+      px,
+      why: 'crossing',
+      text: `Another line covers this one for ${whole(length)} pixels: check that the curve goes straight on.`,
+    };
   }
   return null;
 }

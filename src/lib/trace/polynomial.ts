@@ -12,7 +12,13 @@ export interface LocalFit {
  * Weighted least squares of v = c0 + c1·(t − centre) + c2·(t − centre)²/2 by the normal equations of moments (at most 3 × 3, Cramer's rule);
  * one degree less where the points do not hold it. Null without points.
  */
-export function localFit(t: readonly number[], v: readonly number[], w: readonly number[] | null, centre: number, degree: 0 | 1 | 2): LocalFit | null {
+export function localFit(
+  t: readonly number[],
+  v: readonly number[],
+  w: readonly number[] | null,
+  centre: number,
+  degree: 0 | 1 | 2,
+): LocalFit | null {
   let [s0, s1, s2, s3, s4, y0, y1, y2] = [0, 0, 0, 0, 0, 0, 0, 0];
   for (let k = 0; k < t.length; k++) {
     const [x, y, weight] = [t[k]! - centre, v[k]!, w ? w[k]! : 1];

@@ -48,7 +48,9 @@ function lineScore(contrast: Contrast, [x, y]: Px, [dx, dy]: Px): number {
     const [cx, cy] = [x + k * dx, y + k * dy];
     const weight = k === 0 ? 1 : 1 - Math.abs(k) / 24;
     sum += weight * Math.min(200, contrast(Math.floor(cx), Math.floor(cy)));
-    beside += (weight * (contrast(Math.floor(cx - 4 * dy), Math.floor(cy + 4 * dx)) + contrast(Math.floor(cx + 4 * dy), Math.floor(cy - 4 * dx)))) / 2;
+    beside +=
+      (weight * (contrast(Math.floor(cx - 4 * dy), Math.floor(cy + 4 * dx)) + contrast(Math.floor(cx + 4 * dy), Math.floor(cy - 4 * dx)))) /
+      2;
   }
   return sum - 0.6 * beside;
 }

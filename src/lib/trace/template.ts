@@ -112,7 +112,15 @@ export function placeBy(
 }
 
 /** Whether the pixels that agree with the template know enough of its place, and see its ink. */
-function holds(template: Template, cover: Float64Array, trust: Float64Array, start: number, length: number, v: number, mayBeCut: boolean): boolean {
+function holds(
+  template: Template,
+  cover: Float64Array,
+  trust: Float64Array,
+  start: number,
+  length: number,
+  v: number,
+  mayBeCut: boolean,
+): boolean {
   let [known, all, ink, wrong, full] = [0, 0, 0, 0, 0];
   for (let k = 0; k < length; k++) {
     const offset = start + k + 0.5 - v;

@@ -120,7 +120,13 @@ function nearly(steps: readonly Seen[], mode: Mode, t: number): Expected | null 
   const last = steps.slice(-4).filter(({ seen }) => seen === 'clean');
   if (last.length < 4) return null;
   const places = last.map((step) => inMode(step, mode));
-  const fit = localFit(places.map(([at]) => at), places.map(([, v]) => v), null, t, 1);
+  const fit = localFit(
+    places.map(([at]) => at),
+    places.map(([, v]) => v),
+    null,
+    t,
+    1,
+  );
   return fit && { v: fit.value, slope: fit.slope };
 }
 
@@ -173,14 +179,21 @@ function goesOn(line: Line, kept: Kept, steps: readonly Seen[], { mode, sign }: 
   const seen: Seen[] = [];
   for (let k = 0; k < wanted; k++) {
     const at = t + k * sign;
-    const expected = seen.length >= 4 ? (expect(seen, mode, at, 0) ?? before) : { v: before.v + k * sign * before.slope, slope: before.slope };
+    const expected =
+      seen.length >= 4 ? (expect(seen, mode, at, 0) ?? before) : { v: before.v + k * sign * before.slope, slope: before.slope };
     if (!isInside(line.bounds, mode, at, expected.v)) break;
     const step = mended(line, kept, steps, stepAt(line, mode, at, expected, toleranceAfter(hidden)), expected, false);
     if (step.seen === 'clean') seen.push(step);
     else if (wanted > 4 && k < 4 && k >= seen.length + 1) return false;
   }
   if (seen.length < Math.max(2, 0.55 * wanted)) return false;
-  const fit = localFit(seen.map((s) => s.t), seen.map((s) => s.v), null, t, 1);
+  const fit = localFit(
+    seen.map((s) => s.t),
+    seen.map((s) => s.v),
+    null,
+    t,
+    1,
+  );
   if (!fit || seen.length < 5) return true;
   return Math.abs(Math.atan(fit.slope) - Math.atan(before.slope)) < 0.15 + 0.002 * hidden;
 }
