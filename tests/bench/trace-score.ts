@@ -1,4 +1,4 @@
-import { toPixel, toValue, type Frame, type Px } from '@/lib/geometry';
+import { toValue, type Frame, type Px } from '@/lib/geometry';
 import type { Followed } from '@/lib/trace';
 import type { Truth } from '../support/charts';
 
@@ -22,7 +22,7 @@ function drawnAt({ x, y }: Truth['curves'][number], at: number): number | null {
   return y[k - 1]! + ((at - x[k - 1]!) / (x[k]! - x[k - 1]!)) * (y[k]! - y[k - 1]!);
 }
 
-/** Vertical distance made perpendicular where the curve is steep, so that a fraction of a pixel stays one. */
+/** Followed minus drawn y at the x of a followed point; null beyond the drawn ends. */
 function errorAt(frame: Frame, curve: Truth['curves'][number], px: Px): number | null {
   const [x, y] = toValue(frame, px);
   const drawn = drawnAt(curve, x);
@@ -73,4 +73,3 @@ export function scoreCurve(
   };
 }
 
-void toPixel;
