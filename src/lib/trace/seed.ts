@@ -35,7 +35,7 @@ function inkNear(contrast: Contrast, [x, y]: Px): { column: number; row: number;
     for (let column = Math.floor(x - REACH); column <= x + REACH; column++) {
       const away = Math.hypot(column + 0.5 - x, row + 0.5 - y);
       const strength = away <= REACH ? contrast(column, row) : 0;
-      if (strength >= LEAST_CONTRAST) found.push({ column, row, score: Math.min(strength, 160) * Math.exp(-(away * away) / 10) });
+      if (strength >= LEAST_CONTRAST) found.push({ column, row, score: Math.min(strength, 120) * Math.exp(-(away * away) / 6) });
     }
   }
   return found.sort((one, other) => other.score - one.score);
@@ -47,7 +47,7 @@ function lineScore(contrast: Contrast, [x, y]: Px, [dx, dy]: Px): number {
   for (let k = -12; k <= 12; k++) {
     const [cx, cy] = [x + k * dx, y + k * dy];
     const weight = k === 0 ? 1 : 1 - Math.abs(k) / 24;
-    sum += weight * Math.min(200, contrast(Math.floor(cx), Math.floor(cy)));
+    sum += weight * Math.min(120, contrast(Math.floor(cx), Math.floor(cy)));
     beside +=
       (weight * (contrast(Math.floor(cx - 4 * dy), Math.floor(cy + 4 * dx)) + contrast(Math.floor(cx + 4 * dy), Math.floor(cy - 4 * dx)))) /
       2;

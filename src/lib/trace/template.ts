@@ -111,7 +111,7 @@ export function placeBy(
   return holds(template, cover, trust, start, length, v, mayBeCut) ? v : null;
 }
 
-/** Whether the pixels that agree with the template know enough of its place, and see its ink. */
+/** Whether the pixels that agree with the template know enough of its place, and see its ink; not where the same ink lies on both sides, as in a marker. */
 function holds(
   template: Template,
   cover: Float64Array,
@@ -121,7 +121,7 @@ function holds(
   v: number,
   mayBeCut: boolean,
 ): boolean {
-  let [known, all, ink, wrong, full] = [0, 0, 0, 0, 0];
+  let [known, all, ink, wrong, full, over, under] = [0, 0, 0, 0, 0, 0, 0];
   for (let k = 0; k < length; k++) {
     const offset = start + k + 0.5 - v;
     const steepness = (coverAt(template, offset + 0.25) - coverAt(template, offset - 0.25)) ** 2;
@@ -132,7 +132,11 @@ function holds(
     if (Math.abs(rest) < 0.2) {
       known += trust[k]! * steepness;
       ink += trust[k]! * Math.max(0, there);
+    } else if (rest > 0 && Math.abs(offset) < template.reach - 0.8) {
+      if (offset < 0) over += trust[k]! * rest;
+      else under += trust[k]! * rest;
     } else if (rest < 0) wrong += trust[k]! * -rest;
   }
+  if (over > 0.3 && under > 0.3) return false;
   return known > 0.15 * all && ink > 0.15 && wrong < (mayBeCut && known > 0.35 * all ? 0.65 * full : 0.5);
 }
