@@ -11,6 +11,8 @@ export interface Score {
   readonly bias: number;
   /** Share of the drawn x range inside steps of at most 2 px, or declared gaps shorter than 3 % of the axis, in %. */
   readonly coverage: number;
+  /** Followed points more than 1 % of the curve's length beyond its drawn ends. */
+  readonly beyond: number;
 }
 
 /** The y of a drawn curve at x, null beyond its ends by more than a little. */
@@ -70,6 +72,6 @@ export function scoreCurve(
     worst: sizes[sizes.length - 1] ?? NaN,
     bias: mean(errors),
     coverage: covered(frame, curve, followed, xRange),
+    beyond: followed.points.length - errors.length,
   };
 }
-

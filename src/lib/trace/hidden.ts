@@ -51,19 +51,19 @@ const lengthOf = ({ from, to }: Hidden) => to - from + 1;
 const alike = (run: Hidden, runs: readonly Hidden[]) =>
   runs.filter((other) => lengthOf(other) <= 1.6 * lengthOf(run) + 2 && lengthOf(other) >= lengthOf(run) / 1.6 - 2);
 
-/** Whether what covers the line sits evenly on it, as a marker does; a line that crosses comes from one side and leaves on the other. */
-function sitsOn(steps: readonly Seen[], { from, to }: Hidden): boolean {
+/** Whether what covers the line is a blob of its own ink, as a marker is: as high as it is long, and much heavier than two lines that cross. */
+function isBlob(steps: readonly Seen[], { from, to }: Hidden): boolean {
   const over = steps.slice(from, to + 1).filter(({ seen, beside }) => seen === 'part' && beside !== undefined);
   if (over.length < 3) return false;
   const full = median(steps.filter(({ mass, seen }) => seen === 'clean' && mass > 0).map(({ mass }) => mass));
-  const heavy = over.filter(({ mass }) => mass > 1.5 * full);
-  const drift = over.reduce((sum, { beside = 0 }) => sum + Math.abs(beside), 0) / over.length;
-  return heavy.length >= over.length / 2 && drift < 0.4 + 0.06 * lengthOf({ from, to, empty: 0 });
+  const heavy = over.filter(({ mass }) => mass > 2.4 * full);
+  const height = Math.max(...over.map(({ mass }) => mass));
+  return heavy.length >= 0.4 * over.length && height < 1.8 * (to - from + 1) + 3;
 }
 
-/** Why a run has no points. Dashes come in numbers and alike; markers sit evenly on the line; other bare runs are taken for labels, the rest for crossings. */
+/** Why a run has no points. Dashes come in numbers and alike; markers are blobs of which there are several; other bare runs are taken for labels, the rest for crossings. */
 export function whyHidden(steps: readonly Seen[], run: Hidden, runs: readonly Hidden[]): Gap['why'] {
   const likes = alike(run, runs);
   if (isBare(run)) return likes.filter(isBare).length >= 4 && lengthOf(run) <= 60 ? 'dash' : 'label';
-  return sitsOn(steps, run) ? 'marker' : 'crossing';
+  return likes.length >= 2 && isBlob(steps, run) ? 'marker' : 'crossing';
 }

@@ -79,7 +79,12 @@ describe('a line goes on', () => {
 
   it('through one that lies over it in another colour', () => {
     const flat = (x: number) => 100 + 0.1 * x;
-    const drawn = stroke(stroke(blank(300, 260), { ...solid, colour: [20, 90, 180] }), { ...solid, y: flat, colour: [210, 120, 0], thickness: 3 });
+    const drawn = stroke(stroke(blank(300, 260), { ...solid, colour: [20, 90, 180] }), {
+      ...solid,
+      y: flat,
+      colour: [210, 120, 0],
+      thickness: 3,
+    });
     const { points } = follow(drawn, at(60));
     expect(worst(errors(points, curve))).toBeLessThan(0.25);
     expect(span(points)[1]).toBeGreaterThan(277);
