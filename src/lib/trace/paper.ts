@@ -30,18 +30,35 @@ function medianOf({ width, height, rgb }: Raster, left: number, top: number): Fl
 
 /** The ground of a picture, measured block by block where it is asked for, linear between block centres. */
 export function paperOf(picture: Raster): Paper {
-  const [across, down] = [Math.ceil(picture.width / BLOCK), Math.ceil(picture.height / BLOCK)];
-  const blocks: (Float64Array | undefined)[] = new Array(across * down);
-  const block = (x: number, y: number): Float64Array => {
-    const [column, row] = [Math.min(across - 1, Math.max(0, x)), Math.min(down - 1, Math.max(0, y))];
-    return (blocks[row * across + column] ??= medianOf(picture, column * BLOCK, row * BLOCK));
+  const across = Math.ceil(picture.width / BLOCK);
+  const down = Math.ceil(picture.height / BLOCK);
+  const values = new Float64Array(across * down * 3);
+  const isKnown = new Uint8Array(across * down);
+  /** Where the values of a block are; blocks beyond the edge are those at the edge. */
+  const block = (x: number, y: number): number => {
+    const column = x < 0 ? 0 : x >= across ? across - 1 : x;
+    const row = y < 0 ? 0 : y >= down ? down - 1 : y;
+    const at = row * across + column;
+    if (isKnown[at] === 0) {
+      values.set(medianOf(picture, column * BLOCK, row * BLOCK), at * 3);
+      isKnown[at] = 1;
+    }
+    return at * 3;
   };
   const at = (column: number, row: number, out: Float64Array): void => {
-    const [x, y] = [(column + 0.5) / BLOCK - 0.5, (row + 0.5) / BLOCK - 0.5];
-    const [left, top] = [Math.floor(x), Math.floor(y)];
-    const [fx, fy] = [x - left, y - top];
-    const [a, b, c, d] = [block(left, top), block(left + 1, top), block(left, top + 1), block(left + 1, top + 1)];
-    for (let k = 0; k < 3; k++) out[k] = (a[k]! * (1 - fx) + b[k]! * fx) * (1 - fy) + (c[k]! * (1 - fx) + d[k]! * fx) * fy;
+    const x = (column + 0.5) / BLOCK - 0.5;
+    const y = (row + 0.5) / BLOCK - 0.5;
+    const left = Math.floor(x);
+    const top = Math.floor(y);
+    const a = block(left, top);
+    const b = block(left + 1, top);
+    const c = block(left, top + 1);
+    const d = block(left + 1, top + 1);
+    const fx = x - left;
+    const fy = y - top;
+    for (let k = 0; k < 3; k++) {
+      out[k] = (values[a + k]! * (1 - fx) + values[b + k]! * fx) * (1 - fy) + (values[c + k]! * (1 - fx) + values[d + k]! * fx) * fy;
+    }
   };
   return { at };
 }

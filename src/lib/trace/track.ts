@@ -171,9 +171,23 @@ function uncover(line: Line, kept: Kept, steps: Seen[], next: Seen, sign: 1 | -1
   }
 }
 
+const FEWEST_DASHES = 2;
+
+/** How many steps beyond a gap are looked at: few where the line is dashed or the gap a mere scratch, many where it could as well have ended. */
+function lookAhead({ thickness }: Line, steps: readonly Seen[], hidden: number): number {
+  if (hidden <= Math.max(4, 1.5 * thickness)) return 4;
+  if (hidden > Math.max(8, 5 * thickness)) return 14;
+  let [dashes, run] = [0, 0];
+  for (const { seen } of steps.slice(-150 - hidden, -hidden)) {
+    if (seen === 'clean' && run >= 3) dashes++;
+    run = seen === 'clean' ? 0 : run + 1;
+  }
+  return dashes >= FEWEST_DASHES ? 4 : 9;
+}
+
 /** Whether what comes after a gap is the line: it goes on in the old direction for a while. */
 function goesOn(line: Line, kept: Kept, steps: readonly Seen[], { mode, sign }: Heading, t: number, hidden: number): boolean {
-  const wanted = hidden > Math.max(8, 5 * line.thickness) ? 14 : 4;
+  const wanted = lookAhead(line, steps, hidden);
   const before = expect(steps, mode, t, hidden);
   if (!before) return false;
   const seen: Seen[] = [];
