@@ -5,18 +5,11 @@ function ofChart(chart: ReadingChart, path: string): Refusal | null {
   if (!chart.marks) {
     return { path: `${path}.marks`, message: 'This version does not find the frame of a chart by itself: give the marks of the chart.' };
   }
-  if (!chart.curves) {
-    return {
-      path: `${path}.curves`,
-      message: 'This version does not find the curves of a chart by itself: give the curves with their points.',
-    };
-  }
-  const started = chart.curves.findIndex(({ points }) => points === undefined);
-  return started < 0
+  return chart.curves
     ? null
     : {
-        path: `${path}.curves[${started}].start`,
-        message: 'This version does not follow a curve from its start: give the curve as points.',
+        path: `${path}.curves`,
+        message: 'This version does not find the curves of a chart by itself: give a pixel on each curve to start from, or its points.',
       };
 }
 

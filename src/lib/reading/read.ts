@@ -2,6 +2,7 @@ import type { ModuleFit, Observation } from '@/lib/fit';
 import { toValue, type Frame, type Px } from '@/lib/geometry';
 import type { ReadingChart, ReadingDocument } from './document';
 import { fitReading } from './fit-reading';
+import { followCurves, type Remarks } from './follow-curves';
 import { framesOf, marksOf } from './frames';
 import { describeModel } from './model';
 import { notYet } from './not-yet';
@@ -60,56 +61,65 @@ async function picturesOf({ charts }: ReadingDocument, host: ReadingHost): Promi
   return pictures;
 }
 
-/** The first mark or point that lies outside its picture. */
+/** The first mark, point or start that lies outside its picture. */
 function outside({ marks = [], curves = [] }: ReadingChart, { width, height }: Picture, path: string): Refusal | null {
   const isOut = ([x, y]: Px) => !(x >= 0 && y >= 0 && x <= width && y <= height);
   const message = `This pixel lies outside the picture, which is ${width} pixels wide and ${height} high.`;
   const mark = marks.findIndex(({ px }) => isOut(px));
   if (mark >= 0) return { path: `${path}.marks[${mark}].px`, message };
-  for (const [at, { points = [] }] of curves.entries()) {
+  for (const [at, { points = [], start, through = [] }] of curves.entries()) {
     const point = points.findIndex(isOut);
     if (point >= 0) return { path: `${path}.curves[${at}].points[${point}]`, message };
+    if (start && isOut(start)) return { path: `${path}.curves[${at}].start`, message };
+    const passed = through.findIndex(isOut);
+    if (passed >= 0) return { path: `${path}.curves[${at}].through[${passed}]`, message };
   }
   return null;
 }
 
-function readCurves(chart: ReadingChart, frame: Frame): ReadCurve[] {
-  return (chart.curves ?? []).map(({ value, by = 'hand', points = [] }) => ({
+function readCurves(chart: ReadingChart, frame: Frame, remarks: readonly (Remarks | null)[]): ReadCurve[] {
+  return (chart.curves ?? []).map(({ value, by = 'hand', points = [] }, at) => ({
     value,
     by,
     points: points.map((px) => {
       const [x, y] = toValue(frame, px);
       return { px, x: tidy(x), y: tidy(y) };
     }),
-    gaps: [],
-    doubts: [],
+    gaps: remarks[at]?.gaps ?? [],
+    doubts: remarks[at]?.doubts ?? [],
   }));
 }
 
-function readChart(chart: ReadingChart, frame: Frame, { fileSha256, pixelsSha256 }: Picture): ReadChart {
+function readChart(
+  chart: ReadingChart,
+  frame: Frame,
+  { fileSha256, pixelsSha256 }: Picture,
+  remarks: readonly (Remarks | null)[],
+): ReadChart {
   const residualPx = frame.residualPx === null ? null : tidy(frame.residualPx);
   return {
     image: chart.image,
     fileSha256,
     pixelsSha256,
     frame: { kind: frame.kind, marks: marksOf(chart), residualPx },
-    curves: readCurves(chart, frame),
+    curves: readCurves(chart, frame, remarks),
   };
 }
 
 /**
- * Reads a document that `parseReadingDocument` let through: frames from the marks, values of all points, the model, the predictions.
+ * Reads a document that `parseReadingDocument` let through: frames from the marks, curves followed from their starts, values of all points, the model, the predictions.
  * The same document and pictures give the same result to the last bit. Throws {@link ReadingRefused} with the place in the document and a sentence.
  */
-export async function readWithFit(document: ReadingDocument, host: ReadingHost): Promise<ReadWithFit> {
-  const unable = notYet(document);
+export async function readWithFit(asked: ReadingDocument, host: ReadingHost): Promise<ReadWithFit> {
+  const unable = notYet(asked);
   if (unable) return refuse(unable);
-  const pictures = await picturesOf(document, host);
-  const beyond = document.charts.map((chart, at) => outside(chart, pictures[at]!, `charts[${at}]`)).find((refusal) => refusal !== null);
+  const pictures = await picturesOf(asked, host);
+  const beyond = asked.charts.map((chart, at) => outside(chart, pictures[at]!, `charts[${at}]`)).find((refusal) => refusal !== null);
   if (beyond) return refuse(beyond);
-  const framed = framesOf(document);
+  const framed = framesOf(asked);
   if (!framed.ok) return refuse(framed);
   const { frames } = framed;
+  const { document, remarks } = await followCurves(asked, pictures);
   const [problem] = observationsOf(document, frames).problems;
   if (problem) return refuse(problem);
 
@@ -121,11 +131,11 @@ export async function readWithFit(document: ReadingDocument, host: ReadingHost):
     format: 'couplet.result',
     version: 1,
     engine: ENGINE,
-    charts: document.charts.map((chart, at) => readChart(chart, frames[at]!, pictures[at]!)),
+    charts: document.charts.map((chart, at) => readChart(chart, frames[at]!, pictures[at]!, remarks[at]!)),
     model,
     modelMissing,
-    predictions: (document.predict ?? []).map((asked) =>
-      fit && model ? predictionOf(asked, fit, model) : missingPrediction(asked, modelMissing ?? ''),
+    predictions: (document.predict ?? []).map((wanted) =>
+      fit && model ? predictionOf(wanted, fit, model) : missingPrediction(wanted, modelMissing ?? ''),
     ),
     checks: [],
   };

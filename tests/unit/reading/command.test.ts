@@ -91,7 +91,7 @@ describe('the command', () => {
 
   it('prints nothing but one line of JSON for each refused document when one is refused', async () => {
     write('sheet/odd.reading.json', { ...clicked, charts: [{ ...clicked.charts[0], colour: 'red' }] });
-    write('sheet/start.reading.json', { ...clicked, charts: [{ ...clicked.charts[0], curves: [{ value: 1, start: [200, 300] }] }] });
+    write('sheet/start.reading.json', { ...clicked, charts: [{ ...clicked.charts[0], curves: [{ value: 1, start: [820, 150] }] }] });
     const done = await run(folder, 'sheet/odd.reading.json', 'sheet/both.reading.json', 'sheet/start.reading.json');
     expect(done).toMatchObject({ status: 1, out: '' });
     expect(refusals(done)).toEqual([
@@ -99,7 +99,7 @@ describe('the command', () => {
       {
         document: 'sheet/start.reading.json',
         path: 'charts[0].curves[0].start',
-        message: expect.stringContaining('does not follow a curve'),
+        message: expect.stringContaining('no line within 6 pixels of 820.0, 150.0'),
       },
     ]);
     expect(Object.keys(JSON.parse(done.errors[0]!) as object)).toEqual(['error']);

@@ -182,10 +182,10 @@ describe('a document is refused', () => {
 
   it.each<[string, string, object, RegExp]>([
     [
-      'a curve to be followed',
-      'charts[1].curves[0].start',
+      'a curve to be followed without pixels',
+      'charts[1].image',
       heatWith({ curves: [{ value: 1, start: [200, 300] }] }),
-      /does not follow a curve/,
+      /pixels of this picture are not at hand/,
     ],
     ['marks to be found', 'charts[1].marks', heatWith({ marks: undefined }), /does not find the frame/],
     ['curves to be found', 'charts[1].curves', heatWith({ curves: undefined }), /does not find the curves/],
