@@ -2,9 +2,9 @@ import {
   constantModule,
   currentForHeat,
   currentForMostHeat,
+  largestDeltaTOf,
   lumpedAt,
   maximaAtHotSide,
-  maximaOf,
   moduleOfForm,
   numericCurrents,
   responseOf,
@@ -83,9 +83,9 @@ function numericForm(form: ModelForm, constants: ModuleConstants): Form {
     largestDeltaT: (Th) => {
       const known = largest.get(Th);
       if (known) return known;
-      const { imaxLargestDeltaT: currentA, dTmaxK: deltaTK } = maximaOf(form, constants, Th);
-      largest.set(Th, { currentA, deltaTK });
-      return { currentA, deltaTK };
+      const found = largestDeltaTOf(form, constants, Th);
+      largest.set(Th, found);
+      return found;
     },
     deltaTWithoutHeat: (I, Th) => {
       const heatOver = (deltaT: number) => module.heat(I, kelvin(Th - deltaT), Th);

@@ -4,7 +4,7 @@ export type { ModuleResponse, ThermoelectricModule } from './types';
 export { figureOfMerit } from './constant';
 export { constantModule, currentAtVoltage, lumpedAt, moduleOfForm, responseOf } from './forms';
 export { temperatureCoefficients, type TemperatureCoefficients } from './coefficients';
-export { maximaAtHotSide, maximaOf } from './maxima';
+export { largestDeltaTOf, maximaAtHotSide, maximaOf } from './maxima';
 export { bestCop, currentForBestCop, currentForHeat, currentForMostHeat } from './currents';
 export { numericCurrents, type NumericCurrents } from './numeric-currents';
 export { constantsFromRatings, type ConstantsFromRatings, type ThreeRatings } from './ratings';

@@ -66,6 +66,16 @@ function coldestOf(form: ModelForm, constants: ModuleConstants, Th: Kelvin): Col
   return null;
 }
 
+/** Current (A) of the largest ΔT and that ΔT (K) of any form with its hot face held at Th (K), and nothing else; NaN where none is found. */
+export function largestDeltaTOf(
+  form: ModelForm,
+  constants: ModuleConstants,
+  Th: Kelvin,
+): { readonly currentA: number; readonly deltaTK: number } {
+  const found = coldestOf(form, constants, Th);
+  return { currentA: found?.I ?? NaN, deltaTK: Th - (found?.Tc ?? NaN) };
+}
+
 /**
  * What a module of any form reaches with its hot face held at Th (K): closed for constants, else from the form's own heat and voltage. NaN
  * where the form finds no largest ΔT or no most heat there.

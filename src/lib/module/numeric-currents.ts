@@ -20,8 +20,16 @@ export function numericCurrents(form: ModelForm, constants: ModuleConstants): Nu
   const scale = constants.alpha / constants.R;
   const at = (I: number, Tc: number, Th: number) => responseOf(form, constants, I, Tc, Th);
 
-  /** Root of dQc/dI, which falls nearly along a line of slope −R: secant steps after the first. */
+  let known: { readonly Tc: number; readonly Th: number; readonly I: number | null } | null = null;
+
+  /** The current of most heat, remembered for the last faces: a search asks for it again and again. */
   function mostHeat(Tc: number, Th: number): number | null {
+    if (known?.Tc !== Tc || known.Th !== Th) known = { Tc, Th, I: peakCurrent(Tc, Th) };
+    return known.I;
+  }
+
+  /** Root of dQc/dI, which falls nearly along a line of slope −R: secant steps after the first. */
+  function peakCurrent(Tc: number, Th: number): number | null {
     const { alpha, R } = lumpedAt(form, constants, Tc, Th);
     let [I, slope] = [(alpha * Tc) / R, -R];
     let last: { I: number; gain: number } | null = null;
