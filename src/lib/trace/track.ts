@@ -2,7 +2,7 @@ import { localFit } from './polynomial';
 import { sectionAt, type Section } from './section';
 import { placeBy, templateFrom, type Template } from './template';
 import type { InkReader } from './ink';
-import type { Bounds, Mode, Step } from './types';
+import type { Bounds, Mode, Raster, Step } from './types';
 
 /** A step with what was seen there. */
 export interface Seen extends Step {
