@@ -53,7 +53,8 @@ describe('CIELAB of sRGB', () => {
     ['black', [0, 0, 0], [0, 0, 0]],
     ['red', [255, 0, 0], [53.24, 80.09, 67.2]],
   ] as const)('has %s where it belongs', (_, rgb, lab) => {
-    const found = labOf(...rgb);
+    const [red, green, blue] = rgb;
+    const found = labOf(red, green, blue);
     for (const [at, value] of lab.entries()) expect(Math.abs(found[at]! - value)).toBeLessThan(0.02);
   });
 });

@@ -138,5 +138,5 @@ function holds(
     } else if (rest < 0) wrong += trust[k]! * -rest;
   }
   if (over > 0.3 && under > 0.3) return false;
-  return known > 0.15 * all && ink > 0.15 && wrong < (mayBeCut && known > 0.35 * all ? 0.65 * full : 0.5);
+  return known > 0.15 * all && ink > 0.3 && wrong < (mayBeCut && known > 0.35 * all ? 0.65 * full : 0.5);
 }

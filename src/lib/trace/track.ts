@@ -2,7 +2,7 @@ import { localFit } from './polynomial';
 import { sectionAt, type Section } from './section';
 import { placeBy, templateFrom, type Template } from './template';
 import type { InkReader } from './ink';
-import type { Bounds, Mode, Step } from './types';
+import type { Bounds, Mode, Raster, Step } from './types';
 
 /** A step with what was seen there. */
 export interface Seen extends Step {
@@ -52,7 +52,7 @@ function expect(steps: readonly Seen[], mode: Mode, t: number, hidden: number): 
     const [at, v] = inMode(step, mode);
     ts.push(at);
     vs.push(v);
-    ws.push(1 / (1 + (ts.length / most) * 1.5));
+    ws.push((step.mended ? 0.25 : 1) / (1 + (ts.length / most) * 1.5));
   }
   if (ts.length < 2) return null;
   const fit = localFit(ts, vs, ws, t, ts.length >= (hidden > 3 ? 24 : 10) ? 2 : 1);
@@ -61,7 +61,7 @@ function expect(steps: readonly Seen[], mode: Mode, t: number, hidden: number): 
 
 /** Whether a section shows the whole line and nothing else. */
 function isClean({ mass, trust, edge }: Section, expectedMass: number): boolean {
-  return trust > 0.5 && edge < 0.2 && mass > 0.5 * expectedMass - 0.1 && mass < 1.3 * expectedMass + 0.45;
+  return trust > 0.5 && edge < 0.2 && mass > 0.5 * expectedMass - 0.1 && mass < 1.25 * expectedMass + 0.3;
 }
 
 function isInside({ left, top, right, bottom }: Bounds, mode: Mode, t: number, v: number): boolean {
@@ -117,7 +117,7 @@ function mended(line: Line, kept: Kept, steps: readonly Seen[], step: Seen, expe
 
 /** Where the line should be from its very last steps: after a sudden bend the longer past misleads. */
 function nearly(steps: readonly Seen[], mode: Mode, t: number): Expected | null {
-  const last = steps.slice(-4).filter(({ seen }) => seen === 'clean');
+  const last = steps.slice(-4).filter(({ seen, mended }) => seen === 'clean' && !mended);
   if (last.length < 4) return null;
   const places = last.map((step) => inMode(step, mode));
   const fit = localFit(
@@ -176,13 +176,15 @@ const FEWEST_DASHES = 2;
 /** How many steps beyond a gap are looked at: few where the line is dashed or the gap a mere scratch, many where it could as well have ended. */
 function lookAhead({ thickness }: Line, steps: readonly Seen[], hidden: number): number {
   if (hidden <= Math.max(4, 1.5 * thickness)) return 4;
-  if (hidden > Math.max(8, 5 * thickness)) return 14;
-  let [dashes, run] = [0, 0];
+  const isLong = hidden > Math.max(8, 5 * thickness);
+  let [dashes, run, longest] = [0, 0, 0];
   for (const { seen } of steps.slice(-150 - hidden, -hidden)) {
     if (seen === 'clean' && run >= 3) dashes++;
+    if (seen === 'clean') longest = Math.max(longest, run);
     run = seen === 'clean' ? 0 : run + 1;
   }
-  return dashes >= FEWEST_DASHES ? 4 : 9;
+  if (dashes >= FEWEST_DASHES && hidden <= 1.6 * longest + 2) return 4;
+  return isLong ? 14 : 9;
 }
 
 /** Whether what comes after a gap is the line: it goes on in the old direction for a while. */
@@ -263,9 +265,21 @@ const dropHidden = (steps: Seen[], least: number): void => {
   while (steps.length > least && steps[steps.length - 1]!.seen !== 'clean') steps.pop();
 };
 
+const SHORTEST_ISLAND = 8;
+
+/** Drops a few last steps beyond a gap: unless the line is dashed, they are more likely a speck or a letter. */
+function dropIsland(line: Line, steps: Seen[], least: number): void {
+  const gapEnd = steps.findLastIndex(({ seen }) => seen !== 'clean');
+  const gapStart = steps.findLastIndex(({ seen }, at) => at < gapEnd && seen === 'clean');
+  if (gapStart < least || steps.length - 1 - gapEnd >= SHORTEST_ISLAND) return;
+  const hidden = gapEnd - gapStart;
+  if (hidden >= 4 && lookAhead(line, steps.slice(0, gapEnd + 1), hidden) > 4) steps.length = gapStart + 1;
+}
+
 /** Without what does not belong to the end of the line: hidden steps, the slanted cap of the stroke, ink of an axis that the line ends on. */
 function ended(line: Line, steps: Seen[], least: number): Seen[] {
   dropHidden(steps, least);
+  dropIsland(line, steps, least);
   for (let k = 0; k < 5 && steps.length > Math.max(least, 30); k++) {
     const last = steps[steps.length - 1]!;
     const earlier = steps.slice(0, -1 - Math.min(3, k));
