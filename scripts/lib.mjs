@@ -1,5 +1,5 @@
 // Node built-ins only: this runs before anything is installed.
-import { spawnSync } from 'node:child_process';
+import { spawn, spawnSync } from 'node:child_process';
 import { existsSync, readdirSync, statSync } from 'node:fs';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -20,6 +20,19 @@ export function sh(command, args, options = {}) {
 
 /** Runs a program of an installed package: its path under node_modules, then its arguments. */
 export const bin = (name, ...args) => sh(process.execPath, [path.join('node_modules', ...name), ...args]);
+/** Runs programs of installed packages side by side; stops with the first status that is not 0, once all have ended. */
+export async function together(...programs) {
+  const ends = programs.map(
+    ([file, ...args]) =>
+      new Promise((resolve) => {
+        const child = spawn(process.execPath, [path.join('node_modules', file), ...args], { stdio: 'inherit' });
+        child.on('error', () => resolve(1));
+        child.on('exit', (code) => resolve(code ?? 1));
+      }),
+  );
+  const failed = (await Promise.all(ends)).find((code) => code !== 0);
+  if (failed !== undefined) process.exit(failed);
+}
 export const tsx = (...args) => sh(process.execPath, ['--import', 'tsx', ...args]);
 
 const changed = (file) => (existsSync(file) ? statSync(file).mtimeMs : 0);

@@ -226,7 +226,7 @@ describe('pages of a sheet', () => {
       .getByText(/of 5\.\d\u00a0MB/)
       .waitFor();
     await page.getByRole('button', { name: 'Cancel d02.png' }).click();
-    expect(await focused(page)).toBe('Choose pictures');
+    await expect.poll(() => focused(page)).toBe('Choose pictures');
     await page.getByRole('button', { name: 'Cancel slow.png' }).click();
     await files(page).getByText('is page 1').waitFor();
     expect(await files(page).getByRole('listitem').allInnerTexts()).toEqual([
