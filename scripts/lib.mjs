@@ -33,7 +33,6 @@ export async function together(...programs) {
   const failed = (await Promise.all(ends)).find((code) => code !== 0);
   if (failed !== undefined) process.exit(failed);
 }
-export const tsx = (...args) => sh(process.execPath, ['--import', 'tsx', ...args]);
 
 const changed = (file) => (existsSync(file) ? statSync(file).mtimeMs : 0);
 

@@ -1,4 +1,5 @@
 import { openDB, type DBSchema, type IDBPDatabase } from 'idb';
+import { unsavedDatabase } from '@/components/shell/unsaved-work';
 import type { BenchDocument } from '@/lib/editor';
 
 /** Work that the server has not confirmed yet, as it is kept in the browser. */
@@ -24,9 +25,6 @@ export interface UnsavedStore {
   /** Forgets what this tab has kept, or with `whatever` what any has. */
   readonly forget: (readingId: number, tab: string | 'whatever') => Promise<void>;
 }
-
-/** One database a person, deleted as a whole at sign-out. */
-export const unsavedDatabase = (personId: string): string => `couplet-unsaved-${personId}`;
 
 export function unsavedStore(personId: string): UnsavedStore {
   let connection: Promise<IDBPDatabase<Schema>> | null = null;
